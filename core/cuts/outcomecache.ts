@@ -1,0 +1,42 @@
+import type { Judged, Outcome } from './contract';
+import type { Cut } from './cut';
+import { cutKind } from './kinds';
+
+/** Remembers the last outcome of every cut, so that a moved limit evaluates one cut. */
+export interface OutcomeCache {
+  outcome(cut: Cut, objects: Judged, margin: number): Outcome;
+}
+
+/** A cache for one set of objects after another; it forgets when the objects change. */
+export function outcomeCache(): OutcomeCache {
+  let of: Judged | undefined;
+  let kept = new Map<string, { key: string; outcome: Outcome }>();
+  return {
+    outcome(cut, objects, margin) {
+      if (of !== objects) {
+        of = objects;
+        kept = new Map();
+      }
+      const key = JSON.stringify([cut.kind, cut.parameters, cut.missing, margin]);
+      const known = kept.get(cut.id);
+      if (known?.key === key) return known.outcome;
+      const outcome = judgeCut(cut, objects, margin);
+      kept.set(cut.id, { key, outcome });
+      return outcome;
+    },
+  };
+}
+
+/** What one cut says of every object, after its rule for missing values. */
+export function judgeCut(cut: Cut, objects: Judged, margin: number): Outcome {
+  const raw = cutKind(cut.kind).judge(cut.parameters, objects, margin);
+  if (cut.missing === 'unjudged') return raw;
+  const judged = { ...raw, unjudged: raw.unjudged.without(raw.unjudged) };
+  if (cut.missing === 'drop') return judged;
+  return {
+    ...judged,
+    surely: raw.surely.or(raw.unjudged),
+    passes: raw.passes.or(raw.unjudged),
+    possibly: raw.possibly.or(raw.unjudged),
+  };
+}

@@ -1,0 +1,64 @@
+import { KM_S_PER_MAS_YR_KPC } from './constants';
+import { type Galactocentric, galactocentric } from './galactocentric';
+import { skyBasis } from './skybasis';
+import type { SolarFrame } from './solarframes';
+
+/** Observed columns: ICRS degrees, kpc, mas/yr (μ_α cos δ), km/s. NaN is missing. */
+export interface Observed {
+  readonly ra: Float64Array;
+  readonly dec: Float64Array;
+  readonly distance: Float64Array;
+  readonly pmRa?: Float64Array | undefined;
+  readonly pmDec?: Float64Array | undefined;
+  readonly vLos?: Float64Array | undefined;
+}
+
+/** Galactocentric Cartesian columns, kpc and km/s; velocities are NaN where one of their three inputs is missing. */
+export interface Phase {
+  readonly rows: number;
+  readonly x: Float64Array;
+  readonly y: Float64Array;
+  readonly z: Float64Array;
+  readonly vX: Float64Array;
+  readonly vY: Float64Array;
+  readonly vZ: Float64Array;
+  /** Circular speed at the Sun, km/s. */
+  readonly lsrSpeedKmS: number;
+}
+
+/** Turns observed columns into Galactocentric ones (see `galactocentric` for axes and definition). */
+export function phaseOf(observed: Observed, frame: SolarFrame): Phase {
+  const rows = observed.ra.length;
+  const column = (): Float64Array => new Float64Array(rows);
+  const phase = {
+    rows,
+    x: column(),
+    y: column(),
+    z: column(),
+    vX: column(),
+    vY: column(),
+    vZ: column(),
+    lsrSpeedKmS: frame.lsrSpeedKmS,
+  };
+  fill(observed, galactocentric(frame), phase);
+  return phase;
+}
+
+function fill(observed: Observed, to: Galactocentric, phase: Phase): void {
+  const { ra, dec, distance, pmRa, pmDec, vLos } = observed;
+  const moving = pmRa !== undefined && pmDec !== undefined && vLos !== undefined;
+  const basis = new Float64Array(9);
+  for (let row = 0; row < phase.rows; row++) {
+    skyBasis(to.rotation, ra[row]!, dec[row]!, basis);
+    const d = distance[row]!;
+    phase.x[row] = d * basis[0]! + to.offset[0];
+    phase.y[row] = d * basis[1]! + to.offset[1];
+    phase.z[row] = d * basis[2]! + to.offset[2];
+    const east = moving ? KM_S_PER_MAS_YR_KPC * d * pmRa[row]! : Number.NaN;
+    const north = moving ? KM_S_PER_MAS_YR_KPC * d * pmDec[row]! : Number.NaN;
+    const out = moving ? vLos[row]! : Number.NaN;
+    phase.vX[row] = out * basis[0]! + east * basis[3]! + north * basis[6]! + to.sun[0];
+    phase.vY[row] = out * basis[1]! + east * basis[4]! + north * basis[7]! + to.sun[1];
+    phase.vZ[row] = out * basis[2]! + east * basis[5]! + north * basis[8]! + to.sun[2];
+  }
+}
