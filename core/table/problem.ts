@@ -5,6 +5,7 @@ export type ProblemCode =
   | 'not-a-table'
   | 'unclosed-quote'
   | 'ragged-row'
+  | 'comment-rows'
   | 'duplicate-column'
   | 'unnamed-column'
   | 'unknown-column'
