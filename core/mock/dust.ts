@@ -1,11 +1,11 @@
 import { RAD } from '../frame/constants';
 
 const STEPS = 64;
-const SCALE_LENGTH = 3.2;
+const SCALE_LENGTH = 4.2;
 const SCALE_HEIGHT = 0.11;
 const SUN_RADIUS = 8.1;
 /** E(B−V) per kiloparsec in the plane at the Sun. */
-const LOCAL = 0.32;
+const LOCAL = 0.3;
 
 /**
  * Colour excess of the invented foreground between the Sun and a distance (kpc) towards (l, b): an exponential disc of
