@@ -2,7 +2,7 @@ import type { Column } from '../table/column';
 import { measured, type MeasuredId, type RoleId } from '../table/role';
 import { degreesFromSexagesimal } from '../table/sexagesimal';
 import type { Table } from '../table/table';
-import { COMMON_UNITS, unitFactor } from '../table/units';
+import { COMMON_UNITS, SEXAGESIMAL, unitFactor } from '../table/units';
 import { cleanWord, type NameReading, readColumnName } from './columnname';
 
 /** A proposal for the meaning of one column; nothing comes of it until it stands in a recipe. */
@@ -26,8 +26,9 @@ export function guessMeanings(table: Table): Guess[] {
   const values = holders(first.filter(({ of }) => of === ''));
   const proposals = first.map((proposal) => companion(proposal, first, values));
   const taken = holders(proposals);
-  return proposals.map(({ rank: _, of: __, ...guess }) => {
-    if (guess.role === 'ignore') return guess;
+  return proposals.map(({ rank: _, of: __, stated, ...proposal }) => {
+    if (proposal.role === 'ignore') return proposal;
+    const guess = stated ? proposal : inUnitOfValue(proposal, taken);
     const holder = taken.get(guess.role)!;
     if (holder.column !== guess.column)
       return ignored(guess, `"${holder.column}" is the better column for ${guess.role}`);
@@ -35,7 +36,19 @@ export function guessMeanings(table: Table): Guess[] {
   });
 }
 
-type Ranked = Guess & { readonly rank: number; readonly of: string };
+type Ranked = Guess & {
+  readonly rank: number;
+  readonly of: string;
+  /** Whether the file states the unit. */
+  readonly stated: boolean;
+};
+
+/** An error is in the unit of its value unless the file says otherwise. */
+function inUnitOfValue(guess: Guess, taken: ReadonlyMap<string, Guess>): Guess {
+  const value = taken.get(baseRole(guess.role) ?? '');
+  if (!value || value.unit === guess.unit || SEXAGESIMAL.has(value.unit ?? '')) return guess;
+  return { ...guess, unit: value.unit, reason: `by its name, in the unit of "${value.column}"` };
+}
 
 /** The best proposal for each role. */
 function holders(proposals: readonly Ranked[]): Map<string, Ranked> {
@@ -60,6 +73,7 @@ function companion(proposal: Ranked, all: readonly Ranked[], values: ReadonlyMap
     ...ignored(proposal, `it is not the error of "${holder.column}", which has the role ${base}`),
     rank: 99,
     of: '',
+    stated: false,
   };
 }
 
@@ -101,6 +115,7 @@ function propose(column: Column): Ranked {
     reason,
     rank: 99,
     of: '',
+    stated: false,
   });
   const reading = readColumnName(column.name);
   if (!reading) return nothing('the name says nothing of it');
@@ -113,6 +128,7 @@ function propose(column: Column): Ranked {
       reason: 'by its name',
       rank: reading.rank,
       of: '',
+      stated: false,
     };
   }
   if (!hasValues(column)) return nothing('the column has no values');
@@ -141,6 +157,7 @@ function proposeText(
     reason: 'by its name, and its cells are sexagesimal',
     rank: reading.rank,
     of: reading.of,
+    stated: true,
   };
 }
 
@@ -167,8 +184,8 @@ function proposeNumber(
   if (chosen.share < 0.5) return nothing(`the name fits ${definition.label}, but not its values`);
   const words = ['by its name'];
   if (stated !== undefined) words.push('and its unit');
-  else if (chosen.unit !== definition.unit) words.push(`and its values, which fit ${chosen.unit}`);
-  else if (chosen.unit !== '') words.push(`with values that fit ${chosen.unit}`);
+  else if (chosen.unit !== definition.unit && definition.dimension !== 'dex') words.push(`and its values, which fit ${chosen.unit}`);
+  else if (definition.unit !== '') words.push(`with values that fit ${chosen.unit}`);
   if (id === 'parallax') words.push('(an inverted parallax is a biased distance)');
   return {
     column: column.name,
@@ -178,6 +195,7 @@ function proposeNumber(
     reason: words.join(' '),
     rank: reading.rank,
     of: reading.of,
+    stated: stated !== undefined,
   };
 }
 

@@ -47,9 +47,12 @@ export function assignRoles(
   const assigned = new Map<RoleId, Assigned>();
   const extras: Assigned[] = [];
   const problems: Problem[] = [];
+  const unitOf = new Map(meanings.map(({ column, role, unit }) => [role, unit ?? columnNamed(table, column)?.unit]));
   for (const meaning of meanings) {
     if (meaning.role === 'ignore') continue;
-    const made = assign(table, meaning, where);
+    // An error without a unit of its own is in that of its value.
+    const base = unitOf.get(meaning.role.replace(/_error(_minus|_plus)?$/, ''));
+    const made = assign(table, meaning, SEXAGESIMAL.has(base ?? '') ? undefined : base, where);
     if ('code' in made) {
       problems.push(made);
       continue;
@@ -70,7 +73,7 @@ export function assignRoles(
   return { assigned, extras, problems };
 }
 
-function assign(table: Table, meaning: ColumnMeaning, where: string): Assigned | Problem {
+function assign(table: Table, meaning: ColumnMeaning, baseUnit: string | undefined, where: string): Assigned | Problem {
   const problem = (code: Problem['code'], more: Partial<Problem> = {}): Problem => ({
     code,
     severity: 'warning',
@@ -95,7 +98,7 @@ function assign(table: Table, meaning: ColumnMeaning, where: string): Assigned |
     }
     return problem('wrong-unit', { found: 'words', expected: unit === '' ? 'numbers' : `numbers in ${unit}` });
   }
-  const stated = meaning.unit ?? column.unit ?? unit;
+  const stated = meaning.unit ?? column.unit ?? baseUnit ?? unit;
   const factor = unitFactor(stated, dimension);
   if (factor !== undefined) return { column, role, factor, hours: false };
   const known = SEXAGESIMAL.has(stated) || unitFactor(stated, 'number') !== undefined || isUnit(stated);

@@ -8,10 +8,19 @@ import type { Assigned } from './meaning';
 export function canonicalValues(assigned: Assigned, rows: number): Float64Array {
   const { column, factor } = assigned;
   if (column.type === 'number') {
-    return factor === 1 ? column.values.slice(0, rows) : Float64Array.from(column.values, (value) => value * factor!);
+    const convert = conversion(factor!);
+    return Float64Array.from(column.values.subarray(0, rows), convert);
   }
   const degrees = column.dictionary.map((text) => degreesFromSexagesimal(text, assigned.hours));
   return Float64Array.from(column.codes, (code) => (code < 0 ? Number.NaN : degrees[code]!));
+}
+
+/** Multiplies by a factor; divides where its inverse is a whole number, so that 11540 pc are 11.54 kpc to the last bit. */
+function conversion(factor: number): (value: number) => number {
+  if (factor === 1) return (value) => value;
+  const divisor = Math.round(1 / factor);
+  const whole = divisor > 1 && Math.abs(1 / factor - divisor) < 1e-9 * divisor;
+  return whole ? (value) => value / divisor : (value) => value * factor;
 }
 
 /** Values outside what can be become missing; one problem stands for all, with the first lines. */
