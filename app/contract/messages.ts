@@ -112,6 +112,8 @@ export interface BenchView {
   readonly sources: readonly SourceView[];
   readonly conflicts: readonly ConflictView[];
   readonly duplicates: readonly DuplicateRow[];
+  /** Why each row in quarantine stands there, as sentences. */
+  readonly quarantine: readonly string[];
   readonly problems: readonly WordedProblem[];
   readonly quantities: readonly QuantityDefinition[];
   readonly frames: readonly FrameView[];

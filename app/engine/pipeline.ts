@@ -1,5 +1,5 @@
 import { stat } from 'node:fs/promises';
-import { resolve } from 'node:path';
+import { basename, resolve } from 'node:path';
 import type { Judged } from '../../core/cuts/contract';
 import { judgedObjects } from '../../core/cuts/judged';
 import type { Recipe } from '../../core/edition/recipe';
@@ -55,7 +55,11 @@ export async function openSource(source: Source, folder: string, options: Prepar
   const { size } = await withFile(path, true, () => stat(path));
   const label = `Reading ${source.path}`;
   const onBytes = options.onProgress && ((soFar: number) => options.onProgress!({ label, share: soFar / size }));
-  return loadSource({ path, fileName: source.path, missing: source.missing }, { onBytes, signal: options.signal });
+  // The bare name, so that what is said of a file does not hang on where it stands.
+  return loadSource(
+    { path, fileName: basename(source.path), missing: source.missing },
+    { onBytes, signal: options.signal },
+  );
 }
 
 /** Roster and quantities of sources that are already read; sources without a file are left out. */

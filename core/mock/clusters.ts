@@ -2,6 +2,7 @@ import { type Dice, dice } from './dice';
 import { drawTracer, type Population } from './galaxy';
 import { clusterName } from './names';
 import { type Seen, seen } from './observe';
+import { deepChance, wideChance } from './selection';
 
 const COUNTS: readonly (readonly [Population, number])[] = [
   ['halo', 98],
@@ -30,10 +31,10 @@ export function clusters(seed: number): Cluster[] {
   }));
 }
 
-/** The wide survey loses what is far or behind dust, the deep one what is near the plane; nothing is in neither. */
+/** Nothing is in neither survey: what the deep one does not list, the wide one does. */
 function membership(object: Seen, d: Dice): { wide: boolean; deep: boolean } {
-  const wide = d.uniform() < (object.modulus > 17.5 ? 0.45 : 0.9) * (object.ebv > 1.5 ? 0.7 : 1);
-  const deep = d.uniform() < (Math.abs(object.b) < 8 ? 0.3 : 0.85);
+  const wide = d.uniform() < wideChance(object);
+  const deep = d.uniform() < deepChance(object);
   return { wide: wide || !deep, deep };
 }
 

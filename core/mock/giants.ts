@@ -3,6 +3,7 @@ import { INVENTED } from './catalogues';
 import { type Dice, dice } from './dice';
 import { drawTracer, type Population } from './galaxy';
 import { type Errors, measure, type Seen, seen } from './observe';
+import { giantChance } from './selection';
 
 const COUNT = 20_000;
 
@@ -11,10 +12,18 @@ export interface Giant extends Seen {
   readonly id: string;
 }
 
-/** About 20,000 halo giants with some disc and stream among them, in the order of the invented survey. */
+/**
+ * Halo giants with some disc, bulge and stream among them, in the order of the invented survey; those that it misses
+ * behind dust or for their distance are left out.
+ */
 export function giants(seed: number): Giant[] {
   const d = dice(seed);
-  return Array.from({ length: COUNT }, () => ({ id: identifier(d), ...seen(drawTracer(population(d), d)) }));
+  const listed: Giant[] = [];
+  while (listed.length < COUNT) {
+    const star = { id: identifier(d), ...seen(drawTracer(population(d), d)) };
+    if (d.uniform() < giantChance(star)) listed.push(star);
+  }
+  return listed;
 }
 
 function population(d: Dice): Population {

@@ -8,7 +8,7 @@ const DISCOVERERS = [
   'Hesperin',
   'Marlock',
   'Venn-Ashdown',
-  'Drosté',
+  'Brévane',
   'Ibarrola',
 ] as const;
 

@@ -1,6 +1,6 @@
-/** "hh:mm:ss.sss" of an angle in degrees. */
+/** "hh:mm:ss.sss" of an angle in degrees, [0, 360]; what rounds to 24 hours is 0. */
 export function hoursText(degrees: number): string {
-  return parts(degrees / 15, 3);
+  return parts(degrees / 15, 3).replace(/^24/, '00');
 }
 
 /** "±dd:mm:ss.ss" of an angle in degrees. */

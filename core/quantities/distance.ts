@@ -1,8 +1,6 @@
 import type { MeasuredTable } from '../table/measured';
+import { givesDistance } from '../table/parallax';
 import type { QuantityColumn } from './quantity';
-
-/** A parallax gives a distance only when it is at least this many times its error. */
-export const LEAST_PARALLAX_SNR = 5;
 
 /**
  * Heliocentric distance of every row in kpc with its linear 1σ error, or undefined when nothing was measured.
@@ -29,7 +27,7 @@ export function heliocentricDistance(table: MeasuredTable): QuantityColumn | und
     } else if (d > 0) {
       values[row] = d;
       sigma[row] = direct?.sigma?.[row] ?? Number.NaN;
-    } else if (plx > 0 && plx >= LEAST_PARALLAX_SNR * plxSigma) {
+    } else if (givesDistance(plx, plxSigma)) {
       values[row] = 1 / plx;
       sigma[row] = plxSigma / (plx * plx);
     }

@@ -184,7 +184,8 @@ function proposeNumber(
   if (chosen.share < 0.5) return nothing(`the name fits ${definition.label}, but not its values`);
   const words = ['by its name'];
   if (stated !== undefined) words.push('and its unit');
-  else if (chosen.unit !== definition.unit && definition.dimension !== 'dex') words.push(`and its values, which fit ${chosen.unit}`);
+  else if (chosen.unit !== definition.unit && definition.dimension !== 'dex')
+    words.push(`and its values, which fit ${chosen.unit}`);
   else if (definition.unit !== '') words.push(`with values that fit ${chosen.unit}`);
   if (id === 'parallax') words.push('(an inverted parallax is a biased distance)');
   return {

@@ -36,13 +36,15 @@ export interface DuplicateRow {
 /** Two sources that do not agree on one value of one object. */
 export interface Conflict {
   readonly object: number;
+  /** Distances of every kind are compared as 'distance_modulus'. 'position': one name, but apart on the sky. */
   readonly quantity: MeasuredId | 'position';
   readonly chosen: ConflictValue;
   readonly other: ConflictValue;
-  /** Difference over combined 1σ error; Infinity when neither source gives an error and the values differ. */
+  /** Difference over combined 1σ error; Infinity when neither source gives an error, and for positions. */
   readonly sigmas: number;
 }
 
+/** One side of a conflict. Of a position, `value` is the right ascension and `sigma` the separation of the two, degrees. */
 export interface ConflictValue {
   readonly source: string;
   readonly line: number;

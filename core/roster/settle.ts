@@ -1,3 +1,4 @@
+import { givesDistance } from '../table/parallax';
 import type { MeasuredId } from '../table/role';
 import { MEASURED } from '../table/role';
 import type { Identity } from './identify';
@@ -22,7 +23,10 @@ export function priorityOrder(sources: readonly ReadSource[], priority: readonly
   return sources.map((_, index) => index).sort((a, b) => place(sources[a]!.id) - place(sources[b]!.id) || a - b);
 }
 
-/** For every object and group the first source, in order of priority, that has it; its values with their origin. */
+/**
+ * For every object and group the first source, in order of priority, that has it; its values with their origin.
+ * A distance that is not positive, or a parallax too noisy to give one, stands only where no source has better.
+ */
 export function settle(
   sources: readonly ReadSource[],
   objects: readonly Identity[],
@@ -34,7 +38,10 @@ export function settle(
   }
   objects.forEach((object, index) => {
     for (const group of GROUPS) {
-      const source = order.find((candidate) => hasGroup(sources[candidate]!, object.rows[candidate]!, group));
+      const having = order.filter((candidate) => hasGroup(sources[candidate]!, object.rows[candidate]!, group));
+      const source =
+        having.find((candidate) => group.some((id) => usable(sources[candidate]!, object.rows[candidate]!, id))) ??
+        having[0];
       if (source === undefined) continue;
       const row = object.rows[source]!;
       for (const id of present(sources[source]!, row, group)) copy(sources, source, row, id, settled.get(id)!, index);
@@ -67,7 +74,21 @@ function hasGroup(source: ReadSource, row: number, group: readonly MeasuredId[])
 
 function present(source: ReadSource, row: number, group: readonly MeasuredId[]): readonly MeasuredId[] {
   const there = group.filter((id) => !Number.isNaN(valueOf(source, row, id)));
-  return ONE_OF.has(group[0]!) ? there.slice(0, 1) : there;
+  if (!ONE_OF.has(group[0]!)) return there;
+  return [there.find((id) => usable(source, row, id)) ?? there[0]!];
+}
+
+/** Whether a value of a source's row is there and, if it is a distance or a parallax, of use as a distance. */
+export function usable(source: ReadSource, row: number, id: MeasuredId): boolean {
+  const value = valueOf(source, row, id);
+  if (id === 'distance') return value > 0;
+  if (id === 'parallax') return givesDistance(value, sigmaOf(source, row, id));
+  return !Number.isNaN(value);
+}
+
+/** The 1σ error of a source's row, NaN when it has none. */
+export function sigmaOf(source: ReadSource, row: number, id: MeasuredId): number {
+  return row < 0 ? Number.NaN : (source.measured.columns.get(id)?.sigma?.[row] ?? Number.NaN);
 }
 
 function copy(

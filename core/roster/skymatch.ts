@@ -1,4 +1,5 @@
-import { separationDeg } from '../frame/sphere';
+import { RAD } from '../frame/constants';
+import { separationDeg, wrapDeg } from '../frame/sphere';
 
 /** Directions on the sky, degrees. */
 export interface SkyPoints {
@@ -12,34 +13,88 @@ export interface Neighbour {
   readonly separationDeg: number;
 }
 
+/** Zones are not made lower than this, degrees, so that a tiny radius does not mean millions of them. */
+const LEAST_HEIGHT = 1 / 3600;
+/** Windows are this much wider than the radius, degrees, so that rounding loses no pair on the rim. */
+const PAD = 1e-9;
+
 /**
- * For every point of `a` the points of `b` within a radius (degrees), nearest first.
+ * For every point of `a` the points of `b` within a radius (degrees, inclusive), nearest first.
  *
- * Sweeps a window over declination, so that n points with few neighbours cost about n log n; right ascension is
- * compared on the great circle, which holds at the poles and across 0/360. Points with a NaN match nothing.
+ * Sweeps zones of declination with right ascension sorted in each, so that n points with few neighbours cost about
+ * n log n wherever on the sky they crowd. Separations are great circles, which hold at the poles and across 0/360.
+ * Points with a NaN match nothing.
  */
 export function neighbours(a: SkyPoints, b: SkyPoints, radiusDeg: number): readonly Neighbour[][] {
-  const order = Int32Array.from(b.dec, (_, row) => row).filter((row) => !Number.isNaN(b.dec[row]! + b.ra[row]!));
-  order.sort((p, q) => b.dec[p]! - b.dec[q]!);
-  const sorted = Float64Array.from(order, (row) => b.dec[row]!);
+  const zones = zonesOf(b, Math.max(radiusDeg, LEAST_HEIGHT));
   return Array.from(a.dec, (dec, row) => {
     const found: Neighbour[] = [];
-    if (Number.isNaN(dec + a.ra[row]!)) return found;
-    for (let at = lowerBound(sorted, dec - radiusDeg); at < sorted.length && sorted[at]! <= dec + radiusDeg; at++) {
-      const index = order[at]!;
-      const apart = separationDeg(a.ra[row]!, dec, b.ra[index]!, b.dec[index]!);
-      if (apart <= radiusDeg) found.push({ index, separationDeg: apart });
+    const ra = a.ra[row]!;
+    if (Number.isNaN(ra + dec)) return found;
+    const windows = raWindows(wrapDeg(ra), raReach(dec, radiusDeg));
+    const last = zones.of(dec + radiusDeg + PAD);
+    for (let zone = zones.of(dec - radiusDeg - PAD); zone <= last; zone++) {
+      for (const [from, to] of windows) {
+        for (let at = zones.firstFrom(zone, from); zones.zone[at] === zone && zones.ra[at]! <= to; at++) {
+          const index = zones.row[at]!;
+          const apart = separationDeg(ra, dec, b.ra[index]!, b.dec[index]!);
+          if (apart <= radiusDeg) found.push({ index, separationDeg: apart });
+        }
+      }
     }
     return found.sort((p, q) => p.separationDeg - q.separationDeg || p.index - q.index);
   });
 }
 
-function lowerBound(sorted: Float64Array, value: number): number {
-  let [from, to] = [0, sorted.length];
-  while (from < to) {
-    const middle = (from + to) >> 1;
-    if (sorted[middle]! < value) from = middle + 1;
-    else to = middle;
+/** Points in the order of zone, then right ascension. */
+interface Zones {
+  readonly row: Int32Array;
+  readonly zone: Int32Array;
+  readonly ra: Float64Array;
+  of(dec: number): number;
+  /** Place of the first point of a zone at or beyond a right ascension; where it would stand if there is none. */
+  firstFrom(zone: number, ra: number): number;
+}
+
+function zonesOf({ ra, dec }: SkyPoints, height: number): Zones {
+  const of = (declination: number): number => Math.floor((declination + 90) / height);
+  const turned = ra.map(wrapDeg);
+  const row = Int32Array.from(dec, (_, index) => index).filter((index) => !Number.isNaN(ra[index]! + dec[index]!));
+  row.sort((p, q) => of(dec[p]!) - of(dec[q]!) || turned[p]! - turned[q]! || p - q);
+  const zone = Int32Array.from(row, (index) => of(dec[index]!));
+  const sorted = Float64Array.from(row, (index) => turned[index]!);
+  const firstFrom = (wanted: number, start: number): number => {
+    let [from, to] = [0, row.length];
+    while (from < to) {
+      const middle = (from + to) >> 1;
+      const before = zone[middle]! < wanted || (zone[middle] === wanted && sorted[middle]! < start);
+      if (before) from = middle + 1;
+      else to = middle;
+    }
+    return from;
+  };
+  return { row, zone, ra: sorted, of, firstFrom };
+}
+
+/** How far in right ascension a circle about a point reaches, degrees; 180 when it holds a pole. */
+function raReach(dec: number, radius: number): number {
+  if (Math.abs(dec) + radius + PAD >= 90) return 180;
+  return Math.asin(Math.sin((radius + PAD) * RAD) / Math.cos(dec * RAD)) / RAD + PAD;
+}
+
+/** The one or two stretches of [0, 360) within a reach of a right ascension. */
+function raWindows(ra: number, reach: number): (readonly [number, number])[] {
+  if (reach >= 180) return [[0, 360]];
+  const [from, to] = [ra - reach, ra + reach];
+  if (from < 0) {
+    return [
+      [0, to],
+      [from + 360, 360],
+    ];
   }
-  return from;
+  if (to < 360) return [[from, to]];
+  return [
+    [from, 360],
+    [0, to - 360],
+  ];
 }

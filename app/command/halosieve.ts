@@ -1,0 +1,119 @@
+import { parseArgs } from 'node:util';
+import { ProblemError } from '../../core/table/problem';
+import { problemText } from '../../core/table/wording';
+import { apply } from './apply';
+import { type Command, UsageError } from './command';
+import { derive } from './derive';
+import { freeze } from './freeze';
+import { inspect } from './inspect';
+import { open } from './open';
+import { progressLine } from './progressline';
+import { verify } from './verify';
+import { VERSION } from './version';
+
+const COMMANDS: readonly Command[] = [inspect, derive, apply, freeze, verify, open];
+const COMMON = { json: { type: 'boolean' }, help: { type: 'boolean', short: 'h' } } as const;
+
+process.stdout.on('error', (error: NodeJS.ErrnoException) => {
+  // The reader of a pipe went away: there is nobody left to tell.
+  if (error.code === 'EPIPE') process.exit(0);
+  throw error;
+});
+
+const stop = new AbortController();
+process.once('SIGINT', () => stop.abort());
+process.once('SIGTERM', () => stop.abort());
+
+const print = (line: string): void => void process.stdout.write(`${line}\n`);
+const note = (line: string): void => void process.stderr.write(`${line}\n`);
+
+process.exitCode = await main(process.argv.slice(2));
+
+async function main([name, ...rest]: readonly string[]): Promise<number> {
+  if (name === '--version') return say(VERSION);
+  if (name === undefined || name === '--help' || name === '-h') {
+    for (const line of programHelp()) (name === undefined ? note : print)(line);
+    return name === undefined ? 2 : 0;
+  }
+  const command = COMMANDS.find((candidate) => candidate.name === name);
+  if (!command) return misuse(`there is no command "${name}"; see halosieve --help`);
+  return runCommand(command, rest);
+}
+
+async function runCommand(command: Command, args: string[]): Promise<number> {
+  const progress = progressLine(process.stderr);
+  try {
+    const { values, positionals } = parseArgs({
+      args,
+      options: { ...COMMON, ...command.options },
+      allowPositionals: true,
+    });
+    if (values.help) {
+      for (const line of commandHelp(command)) print(line);
+      return 0;
+    }
+    const [least, most] = command.words;
+    if (positionals.length < least || positionals.length > most) throw new UsageError(`usage: ${command.usage}`);
+    return await command.run({
+      words: positionals,
+      values,
+      signal: stop.signal,
+      onProgress: progress.show,
+      print,
+      note,
+    });
+  } catch (error) {
+    progress.clear();
+    return failed(error);
+  } finally {
+    progress.clear();
+  }
+}
+
+function failed(error: unknown): number {
+  if (error instanceof UsageError) return misuse(error.message);
+  if (error instanceof TypeError && (error as NodeJS.ErrnoException).code?.startsWith('ERR_PARSE_ARGS'))
+    return misuse(error.message);
+  if (error instanceof ProblemError) {
+    for (const problem of error.problems) note(problemText(problem));
+    return error.problems.some(({ code }) => code === 'cancelled') ? 130 : 1;
+  }
+  note(`halosieve failed: ${error instanceof Error ? error.message : String(error)}`);
+  note(
+    'This is a fault of the program. Please report it with what you did; HALOSIEVE_DEBUG=1 shows where it happened.',
+  );
+  if (process.env['HALOSIEVE_DEBUG'] === '1' && error instanceof Error) note(error.stack ?? '');
+  return 1;
+}
+
+function misuse(message: string): number {
+  note(message);
+  return 2;
+}
+
+function say(line: string): number {
+  print(line);
+  return 0;
+}
+
+function programHelp(): string[] {
+  return [
+    'halosieve: from mismatched catalogues of halo tracers to one frozen, documented sample',
+    '',
+    ...COMMANDS.map(({ name, summary }) => `  ${name.padEnd(8)} ${summary}`),
+    '',
+    'halosieve COMMAND --help says more. Exit codes: 0 it went well, 1 the data say no, 2 the command was misused.',
+  ];
+}
+
+function commandHelp({ usage, summary, details }: Command): string[] {
+  return [
+    summary,
+    '',
+    `usage: ${usage}`,
+    '',
+    ...details.map((line) => `  ${line}`),
+    '  --json  the answer for programs',
+    '  --help  this text',
+  ];
+}

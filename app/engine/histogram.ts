@@ -1,0 +1,53 @@
+import { cutKind } from '../../core/cuts/kinds';
+import { Bitset } from '../../core/table/bitset';
+import type { Histogram } from '../contract/messages';
+import type { Session } from './session';
+
+/** Shares of the values that may lie outside the drawn range, so that one outlier does not flatten the rest. */
+const TAIL = 0.005;
+
+/** Histogram of the quantity that a limit stands on: all objects, and those that reach the cut; undefined without data. */
+export function cutHistogram(session: Session, cutId: string, parameter: string, bins: number): Histogram | undefined {
+  const { recipe, prepared, result } = session;
+  const at = recipe.ledger.findIndex(({ id }) => id === cutId);
+  const cut = recipe.ledger[at];
+  if (!cut) return undefined;
+  const kind = cutKind(cut.kind);
+  const limit = kind.limits(cut.parameters).find((candidate) => candidate.parameter === parameter);
+  const column = limit && kind.limitColumn(limit, cut.parameters, prepared.objects);
+  if (!limit || !column) return undefined;
+  const values = limit.absolute ? column.values.map(Math.abs) : column.values;
+  let reaching = Bitset.full(prepared.objects.rows);
+  result.outcomes.slice(0, at).forEach((outcome, earlier) => {
+    if (recipe.ledger[earlier]!.on) reaching = reaching.and(outcome.passes.or(outcome.unjudged));
+  });
+  const [min, max] = rangeWith(robustRange(values), limit.value);
+  const all = new Float64Array(bins);
+  const left = new Float64Array(bins);
+  let missing = 0;
+  values.forEach((value, row) => {
+    if (Number.isNaN(value)) missing++;
+    const bin = Math.floor(((value - min) / (max - min)) * bins);
+    // The upper edge belongs to the last bin.
+    const place = value === max ? bins - 1 : bin;
+    if (!(place >= 0 && place < bins)) return;
+    all[place]!++;
+    if (reaching.has(row)) left[place]!++;
+  });
+  return { min, max, all, reaching: left, missing };
+}
+
+/** Range of the finite values without their outermost tails. */
+export function robustRange(values: Float64Array): [number, number] {
+  const finite = values.filter(Number.isFinite).sort();
+  if (finite.length === 0) return [0, 1];
+  const last = finite.length - 1;
+  return [finite[Math.floor(TAIL * last)]!, finite[Math.ceil((1 - TAIL) * last)]!];
+}
+
+/** The range widened so that the limit can be seen and moved. */
+function rangeWith([low, high]: [number, number], limit: number): [number, number] {
+  const [min, max] = [Math.min(low, limit), Math.max(high, limit)];
+  const margin = 0.03 * (max - min) || 1;
+  return [low >= 0 && limit >= 0 ? Math.max(0, min - margin) : min - margin, max + margin];
+}

@@ -1,0 +1,10 @@
+// The parts of plotly.js that the window uses; the package's own types describe only the full bundle.
+declare module 'plotly.js/lib/core' {
+  import type { PlotlyCore } from './types';
+  const core: PlotlyCore;
+  export default core;
+}
+declare module 'plotly.js/lib/heatmap' {
+  const trace: object;
+  export default trace;
+}

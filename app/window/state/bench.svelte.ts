@@ -1,0 +1,78 @@
+import { type EngineLink, LostError, RefusedError } from '../../contract/link';
+import type { BenchView, Change, Progress, RequestName, Requests } from '../../contract/messages';
+
+/** The bench as this window knows it, and the way to change it. */
+export class BenchState {
+  view = $state.raw<BenchView | undefined>();
+  progress = $state.raw<Progress | undefined>();
+  connected = $state(false);
+  /** Sentences of what went wrong, newest last, until the user puts them away. */
+  refusals = $state<string[]>([]);
+  /** Marked object, shown on every plate; −1 for none. */
+  pointed = $state(-1);
+  chosen = $state(-1);
+  readonly link: EngineLink;
+  #waiting: { change: Change; gesture: string } | undefined;
+  #flying = false;
+
+  constructor(link: EngineLink) {
+    this.link = link;
+    link.listen('bench', (view) => this.#take(view));
+    link.listen('progress', (progress) => (this.progress = progress));
+    link.onState((connected) => {
+      this.connected = connected;
+      if (connected) void this.ask('bench.view', {}).then((view) => view && this.#take(view));
+    });
+  }
+
+  /** Asks the engine; a refusal is shown and gives undefined. */
+  async ask<Name extends RequestName>(
+    name: Name,
+    params: Requests[Name]['params'],
+  ): Promise<Requests[Name]['result'] | undefined> {
+    try {
+      return await this.link.ask(name, params);
+    } catch (error) {
+      if (error instanceof RefusedError) this.refusals.push(...error.problems.map(({ text }) => text));
+      else if (!(error instanceof LostError)) throw error;
+      return undefined;
+    }
+  }
+
+  /** Changes the recipe; true when the engine took it. */
+  async change(change: Change): Promise<boolean> {
+    return (await this.ask('bench.change', { change })) !== undefined;
+  }
+
+  /** Changes within one gesture (a drag, a typing): at most one is under way, and the newest wins. */
+  gesture(change: Change, gesture: string): void {
+    this.#waiting = { change, gesture };
+    if (!this.#flying) void this.#fly();
+  }
+
+  async #fly(): Promise<void> {
+    this.#flying = true;
+    while (this.#waiting) {
+      const next = this.#waiting;
+      this.#waiting = undefined;
+      await this.ask('bench.change', next);
+    }
+    this.#flying = false;
+  }
+
+  #take(view: BenchView): void {
+    if (this.view && view.revision < this.view.revision && view.recipePath === this.view.recipePath) return;
+    if (view.version !== this.view?.version) {
+      this.pointed = -1;
+      this.chosen = -1;
+    }
+    this.view = view;
+  }
+}
+
+let gestures = 0;
+
+/** A name for a new gesture. */
+export function newGesture(): string {
+  return `gesture-${++gestures}-${Math.random().toString(36).slice(2, 8)}`;
+}

@@ -1,0 +1,35 @@
+import type { BenchState } from './bench.svelte';
+
+/** Quantity columns that this window has fetched for the objects in view. */
+export class Values {
+  readonly #bench: BenchState;
+  #version = -1;
+  #columns = new Map<string, Float64Array | undefined>();
+  /** Grows when a column arrives, so that what draws it draws again. */
+  arrived = $state(0);
+  readonly #asked = new Set<string>();
+
+  constructor(bench: BenchState) {
+    this.#bench = bench;
+  }
+
+  /** The column if it is here; asks for it otherwise. */
+  column(id: string): Float64Array | undefined {
+    const version = this.#bench.view?.version ?? -1;
+    if (version !== this.#version) {
+      this.#version = version;
+      this.#columns = new Map();
+      this.#asked.clear();
+    }
+    if (!this.#columns.has(id) && !this.#asked.has(id)) void this.#fetch(id, version);
+    return this.#columns.get(id);
+  }
+
+  async #fetch(id: string, version: number): Promise<void> {
+    this.#asked.add(id);
+    const answer = await this.#bench.ask('quantity.values', { ids: [id], version });
+    if (answer?.version !== this.#version) return;
+    this.#columns.set(id, answer.values[id]);
+    this.arrived++;
+  }
+}

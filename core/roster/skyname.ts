@@ -1,0 +1,20 @@
+import type { ReadSource } from './roster';
+import type { SkyPoints } from './skymatch';
+
+/** Where rows of a source stand on the sky; NaN where it does not say. */
+export function placesOf(source: ReadSource, rows: readonly number[]): SkyPoints {
+  const values = (id: 'ra' | 'dec'): Float64Array => {
+    const column = source.measured.columns.get(id)?.values;
+    return Float64Array.from(rows, (row) => column?.[row] ?? Number.NaN);
+  };
+  return { ra: values('ra'), dec: values('dec') };
+}
+
+/**
+ * A name for a row that has none, of our own scheme: the id of its source, then J and its right ascension and
+ * declination in degrees, e.g. "deep J187.7059+12.3911".
+ */
+export function skyName(source: ReadSource, row: number): string {
+  const { ra, dec } = placesOf(source, [row]);
+  return `${source.id} J${ra[0]!.toFixed(4)}${dec[0]! < 0 ? '' : '+'}${dec[0]!.toFixed(4)}`;
+}
