@@ -3,8 +3,8 @@ import { Bitset } from '../../core/table/bitset';
 import type { Histogram } from '../contract/messages';
 import type { Session } from './session';
 
-/** Shares of the values that may lie outside the drawn range, so that one outlier does not flatten the rest. */
-const TAIL = 0.005;
+/** Shares of the values that may lie outside the drawn range, so that a few outliers do not flatten the rest; they count in the outermost bins. */
+const TAIL = 0.03;
 
 /** Histogram of the quantity that a limit stands on: all objects, and those that reach the cut; undefined without data. */
 export function cutHistogram(session: Session, cutId: string, parameter: string, bins: number): Histogram | undefined {
@@ -27,12 +27,11 @@ export function cutHistogram(session: Session, cutId: string, parameter: string,
   let missing = 0;
   values.forEach((value, row) => {
     if (Number.isNaN(value)) missing++;
-    const bin = Math.floor(((value - min) / (max - min)) * bins);
-    // The upper edge belongs to the last bin.
-    const place = value === max ? bins - 1 : bin;
-    if (!(place >= 0 && place < bins)) return;
-    all[place]!++;
-    if (reaching.has(row)) left[place]!++;
+    else {
+      const bin = Math.min(bins - 1, Math.max(0, Math.floor(((value - min) / (max - min)) * bins)));
+      all[bin]!++;
+      if (reaching.has(row)) left[bin]!++;
+    }
   });
   return { min, max, all, reaching: left, missing };
 }

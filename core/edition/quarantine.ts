@@ -25,10 +25,17 @@ export function quarantineText({ roster }: EditionInput): Generator<string> {
       return { source, line, kind: 'duplicate', reason, text: name };
     }),
   ].sort((a, b) => roster.sources.indexOf(a.source) - roster.sources.indexOf(b.source) || a.line - b.line);
-  const text = (name: 'source' | 'kind' | 'reason' | 'text') => textColumn(name, rows.map((row) => row[name]));
+  const text = (name: 'source' | 'kind' | 'reason' | 'text') =>
+    textColumn(
+      name,
+      rows.map((row) => row[name]),
+    );
   const columns = [
     text('source'),
-    numberColumn('line', Float64Array.from(rows, ({ line }) => line)),
+    numberColumn(
+      'line',
+      Float64Array.from(rows, ({ line }) => line),
+    ),
     text('kind'),
     text('reason'),
     text('text'),

@@ -11,7 +11,10 @@ export function readmeText(input: EditionInput, columns: readonly EditionColumn[
   return `${[
     ...heading(input),
     '## Files',
-    mdTable(['file', 'holds'], EDITION_FILES.map(({ name, holds }) => [`\`${name}\``, md(holds)])),
+    mdTable(
+      ['file', 'holds'],
+      EDITION_FILES.map(({ name, holds }) => [`\`${name}\``, md(holds)]),
+    ),
     'Comma-separated UTF-8 text, one header line. An empty cell is a missing value. Numbers have full precision. In the `.csv` files, and only there, an apostrophe stands before a text that a spreadsheet would take for a formula (one that begins with `=`, `+`, `-` or `@` and is no number).',
     '## Sources',
     ...sources(input),
@@ -35,7 +38,9 @@ function heading(input: EditionInput): string[] {
   const { recipe, number, time } = input;
   const invented = inventedSources(input);
   return [
-    ...(invented.length > 0 ? [`**Invented data: ${invented.map(md).join(', ')}. Nothing here says anything of the sky.**`] : []),
+    ...(invented.length > 0
+      ? [`**Invented data: ${invented.map(md).join(', ')}. Nothing here says anything of the sky.**`]
+      : []),
     `# ${md(recipe.title)}`,
     `Edition ${number}, frozen ${md(readableTime(time))}${recipe.author.trim() === '' ? '' : ` by ${md(recipe.author)}`}.`,
     ...(recipe.note.trim() === '' ? [] : [md(recipe.note)]),
@@ -59,7 +64,10 @@ function frame({ recipe }: EditionInput): string[] {
   const adopted = frameOf(recipe.frame);
   return [
     `Solar frame ${md(adopted.id)}. Galactocentric, right-handed: x from the side of the Sun towards the centre, y with Galactic rotation at the Sun, z to the north Galactic pole. \`v_phi\` and \`l_z\` are positive prograde. Errors are propagated linearly, with the frame taken as exact.`,
-    mdTable(['quantity', 'value'], frameFacts(adopted).map(([name, words]) => [name, md(words)])),
+    mdTable(
+      ['quantity', 'value'],
+      frameFacts(adopted).map(([name, words]) => [name, md(words)]),
+    ),
     `Sources: ${adopted.sources.map(md).join(', ')}. ${md(adopted.note)}`,
   ];
 }

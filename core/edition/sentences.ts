@@ -38,16 +38,20 @@ function mergeSentence({ recipe }: EditionInput): string {
   if (recipe.sources.length < 2) return '';
   const { matchNames, matchRadiusArcsec, priority } = recipe.roster;
   const names = matchNames ? 'when their cleaned names agree or ' : '';
-  const first = priority.length > 0 ? ` that has it, in the order ${priority.join(', ')}` : ' that has it, in their order';
+  const first =
+    priority.length > 0 ? ` that has it, in the order ${priority.join(', ')}` : ' that has it, in their order';
   return `Rows of different catalogues are one object ${names}when they stand within ${matchRadiusArcsec}″ on the sky; each value is that of the first catalogue${first}.`;
 }
 
 function cutsSentence({ recipe, judged }: EditionInput): string {
   const enabled = judged.attrition.filter(({ on }) => on);
   if (enabled.length === 0) return 'No cut was applied.';
-  const parts = enabled.map(({ cut, describe, inTurn }, at) => `(${at + 1}) ${cut}: ${describe}, which removes ${inTurn}`);
+  const parts = enabled.map(
+    ({ cut, describe, inTurn }, at) => `(${at + 1}) ${cut}: ${describe}, which removes ${inTurn}`,
+  );
   const off = recipe.ledger.length - enabled.length;
-  const rest = off === 0 ? '' : ` ${counted(off, 'further cut')} of the ledger ${off === 1 ? 'is' : 'are'} switched off.`;
+  const rest =
+    off === 0 ? '' : ` ${counted(off, 'further cut')} of the ledger ${off === 1 ? 'is' : 'are'} switched off.`;
   return `The cuts, in turn: ${parts.join('; ')}.${rest}`;
 }
 

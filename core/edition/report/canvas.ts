@@ -31,18 +31,24 @@ function tenth(value: number): number {
 /** Frame, ticks and labels of a field. */
 export function axes(field: Field, xLabel: Html, yLabel: Html): Html {
   return html`<g class="axes">
-<rect x="${LEFT}" y="${TOP}" width="${RIGHT - LEFT}" height="${BOTTOM - TOP}" />
-${field.x.ticks.map((tick) => {
-  const at = placeX(field, tick);
-  return html`<path d="M${at} ${BOTTOM}v-6M${at} ${TOP}v6" /><text x="${at}" y="${BOTTOM + 17}" text-anchor="middle">${tickText(field.x, tick)}</text>`;
-})}
-${field.y.ticks.map((tick) => {
-  const at = placeY(field, tick);
-  return html`<path d="M${LEFT} ${at}h6M${RIGHT} ${at}h-6" /><text x="${LEFT - 7}" y="${at + 4.5}" text-anchor="end">${tickText(field.y, tick)}</text>`;
-})}
-<text class="label" x="${(LEFT + RIGHT) / 2}" y="${HEIGHT - 9}" text-anchor="middle">${xLabel}</text>
-<text class="label" transform="translate(15 ${(TOP + BOTTOM) / 2}) rotate(-90)" text-anchor="middle">${yLabel}</text>
-</g>`;
+    <rect x="${LEFT}" y="${TOP}" width="${RIGHT - LEFT}" height="${BOTTOM - TOP}" />
+    ${field.x.ticks.map((tick) => {
+      const at = placeX(field, tick);
+      return html`<path d="M${at} ${BOTTOM}v-6M${at} ${TOP}v6" /><text x="${at}" y="${BOTTOM + 17}" text-anchor="middle"
+          >${tickText(field.x, tick)}</text
+        >`;
+    })}
+    ${field.y.ticks.map((tick) => {
+      const at = placeY(field, tick);
+      return html`<path d="M${LEFT} ${at}h6M${RIGHT} ${at}h-6" /><text x="${LEFT - 7}" y="${at + 4.5}" text-anchor="end"
+          >${tickText(field.y, tick)}</text
+        >`;
+    })}
+    <text class="label" x="${(LEFT + RIGHT) / 2}" y="${HEIGHT - 9}" text-anchor="middle">${xLabel}</text>
+    <text class="label" transform="translate(15 ${(TOP + BOTTOM) / 2}) rotate(-90)" text-anchor="middle"
+      >${yLabel}</text
+    >
+  </g>`;
 }
 
 /** A line across the whole field where one coordinate has a value; nothing outside the field. */
@@ -54,5 +60,7 @@ export function across(field: Field, axis: 'x' | 'y', value: number): string {
 
 /** Clips to the field; the id must be unique in the document. */
 export function clip(id: string): Html {
-  return html`<clipPath id="${id}"><rect x="${LEFT}" y="${TOP}" width="${RIGHT - LEFT}" height="${BOTTOM - TOP}" /></clipPath>`;
+  return html`<clipPath id="${id}"
+    ><rect x="${LEFT}" y="${TOP}" width="${RIGHT - LEFT}" height="${BOTTOM - TOP}"
+  /></clipPath>`;
 }

@@ -47,5 +47,8 @@ function outline(cut: Cut, plate: Plate, field: Field): string {
       between(yLog, ay, by, step / steps),
     ]);
   });
-  return `M${points.map(([px, py]) => (turned ? [py, px] : [px, py])).map(([px, py]) => `${placeX(field, px!)} ${placeY(field, py!)}`).join('L')}Z`;
+  return `M${points
+    .map(([px, py]) => (turned ? [py, px] : [px, py]))
+    .map(([px, py]) => `${placeX(field, px!)} ${placeY(field, py!)}`)
+    .join('L')}Z`;
 }

@@ -22,7 +22,13 @@ function rendered(part: Part): string {
   return 'html' in part ? part.html : part.map(rendered).join('');
 }
 
-const ENTITIES: Readonly<Record<string, string>> = { '&': '&amp;', '<': '&lt;', '>': '&gt;', '"': '&quot;', "'": '&#39;' };
+const ENTITIES: Readonly<Record<string, string>> = {
+  '&': '&amp;',
+  '<': '&lt;',
+  '>': '&gt;',
+  '"': '&quot;',
+  "'": '&#39;',
+};
 
 /** Characters that neither HTML nor XML may hold. */
 // eslint-disable-next-line no-control-regex -- they are what has to go

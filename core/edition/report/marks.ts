@@ -29,5 +29,7 @@ export function standingOf(judged: LedgerResult, object: number): Standing['id']
 /** Small drawing of a mark, for legends and tables; the words stand beside it. */
 export function markIcon(id: Standing['id']): Html {
   const { path } = STANDINGS.find((standing) => standing.id === id)!;
-  return html`<svg class="icon" viewBox="-6 -6 12 12" aria-hidden="true"><path class="mark ${id}" d="M0 0${path}" /></svg>`;
+  return html`<svg class="icon" viewBox="-6 -6 12 12" aria-hidden="true">
+    <path class="mark ${id}" d="M0 0${path}" />
+  </svg>`;
 }

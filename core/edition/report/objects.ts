@@ -17,7 +17,9 @@ const MOST = 200;
 /** Objects whose verdict hangs on their errors, each with the limit it stands on. */
 export function borderlineSection(input: EditionInput): Html {
   const { judged, roster, recipe, quantities } = input;
-  const all = Array.from(judged.verdicts.keys()).filter((object) => VERDICTS[judged.verdicts[object]!] === 'borderline');
+  const all = Array.from(judged.verdicts.keys()).filter(
+    (object) => VERDICTS[judged.verdicts[object]!] === 'borderline',
+  );
   const objects = judgedObjects(quantities, roster.names, roster.keys);
   const { shown, rest } = firstRows(all, MOST, 'sample.csv and dropped.csv');
   const rows = shown.map((object) => [
@@ -26,17 +28,18 @@ export function borderlineSection(input: EditionInput): Html {
     nearCuts(recipe.ledger, judged, object).join(', '),
     html`${nearValues(input, objects, object).map((words, at) => html`${at === 0 ? '' : '; '}${words}`)}`,
   ]);
-  return html`<section aria-labelledby="borderline"><h2 id="borderline">Borderline objects</h2>
-${
-  all.length === 0
-    ? html`<p>No object stands within the margin of a limit.</p>`
-    : html`${table(
-        `Objects that values wrong by ${recipe.borderlineSigma} σ could move across a limit`,
-        [{ text: 'Object' }, { text: 'Sample' }, { text: 'Decided by' }, { text: 'Value and limit' }],
-        rows,
-      )}${rest}`
-}
-</section>`;
+  return html`<section aria-labelledby="borderline">
+    <h2 id="borderline">Borderline objects</h2>
+    ${
+      all.length === 0
+        ? html`<p>No object stands within the margin of a limit.</p>`
+        : html`${table(
+            `Objects that values wrong by ${recipe.borderlineSigma} σ could move across a limit`,
+            [{ text: 'Object' }, { text: 'Sample' }, { text: 'Decided by' }, { text: 'Value and limit' }],
+            rows,
+          )}${rest}`
+    }
+  </section>`;
 }
 
 function nearValues({ recipe, judged }: EditionInput, objects: Judged, object: number): string[] {
@@ -47,17 +50,14 @@ function nearValues({ recipe, judged }: EditionInput, objects: Judged, object: n
       const kind = cutKind(cut.kind);
       const limits = kind.limits(cut.parameters);
       if (limits.length === 0) return [`on the outline that ${cut.id} draws`];
-      return limits.flatMap((limit) => nearValue(limit, kind.limitColumn(limit, cut.parameters, objects), object, recipe.borderlineSigma));
+      return limits.flatMap((limit) =>
+        nearValue(limit, kind.limitColumn(limit, cut.parameters, objects), object, recipe.borderlineSigma),
+      );
     });
 }
 
 /** "z = 3.9 ± 0.3 kpc, kept when |z| ≥ 4 kpc", when the limit lies within the margin of the value. */
-function nearValue(
-  limit: Limit,
-  column: ReturnType<Judged['column']>,
-  object: number,
-  margin: number,
-): string[] {
+function nearValue(limit: Limit, column: ReturnType<Judged['column']>, object: number, margin: number): string[] {
   const [value, sigma] = [column?.values[object] ?? Number.NaN, column?.sigma?.[object] ?? Number.NaN];
   const size = limit.absolute ? Math.abs(value) : value;
   if (!(Math.abs(size - limit.value) <= margin * sigma)) return [];
@@ -70,7 +70,10 @@ function nearValue(
 export function namedSection(input: EditionInput): Html | undefined {
   const lists = input.recipe.ledger.filter((cut) => cut.kind === 'named');
   if (lists.length === 0) return undefined;
-  return html`<section aria-labelledby="named"><h2 id="named">Named objects</h2>${lists.map((cut) => namedTable(cut, input))}</section>`;
+  return html`<section aria-labelledby="named">
+    <h2 id="named">Named objects</h2>
+    ${lists.map((cut) => namedTable(cut, input))}
+  </section>`;
 }
 
 function namedTable(cut: Extract<Cut, { kind: 'named' }>, { recipe, roster, judged }: EditionInput): Html {
@@ -82,7 +85,12 @@ function namedTable(cut: Extract<Cut, { kind: 'named' }>, { recipe, roster, judg
     const object = rowOf.get(key);
     const failed = object === undefined ? [] : failedCuts(others, judged, object);
     const say = failed.length === 0 ? 'it passes' : `fails ${failed.join(', ')}`;
-    return [name, action, reason || 'none written', strangers.has(name) ? 'no object of the roster has this name' : say];
+    return [
+      name,
+      action,
+      reason || 'none written',
+      strangers.has(name) ? 'no object of the roster has this name' : say,
+    ];
   });
   return objects.length === 0
     ? html`<p>${cut.id} names no object.</p>`

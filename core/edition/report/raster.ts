@@ -33,12 +33,20 @@ export function raster(field: Field, x: Float64Array, y: Float64Array, judged: L
       else if (others[cell]! > 0) dots += `M${short(left + 1.2)} ${short((top + bottom) / 2)}h1.8`;
     }
   }
-  return html`<path class="dots" d="${dots}" />${squares.map((path, level) => html`<path class="density level${level}" d="${path}" />`)}`;
+  return html`<path
+      class="dots"
+      d="${dots}"
+    />${squares.map((path, level) => html`<path class="density level${level}" d="${path}" />`)}`;
 }
 
 /** What each level of the raster stands for. */
 export function levelTexts(): string[] {
-  return [...LEVELS.map((most, at) => (most === (LEVELS[at - 1] ?? 0) + 1 ? String(most) : `${(LEVELS[at - 1] ?? 0) + 1}–${most}`)), `over ${LEVELS.at(-1)!}`];
+  return [
+    ...LEVELS.map((most, at) =>
+      most === (LEVELS[at - 1] ?? 0) + 1 ? String(most) : `${(LEVELS[at - 1] ?? 0) + 1}–${most}`,
+    ),
+    `over ${LEVELS.at(-1)!}`,
+  ];
 }
 
 function levelOf(count: number): number {
