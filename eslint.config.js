@@ -23,7 +23,7 @@ export default ts.config(
       '@typescript-eslint/no-non-null-assertion': 'off',
       '@typescript-eslint/restrict-template-expressions': ['error', { allowNumber: true, allowBoolean: true }],
       '@typescript-eslint/switch-exhaustiveness-check': ['error', { considerDefaultExhaustiveForUnions: true }],
-      '@typescript-eslint/no-confusing-void-expression': ['error', { ignoreArrowShorthand: true }],
+      '@typescript-eslint/no-confusing-void-expression': ['error', { ignoreArrowShorthand: true, ignoreVoidReturningFunctions: true }],
       '@typescript-eslint/consistent-type-imports': 'error',
     },
   },
@@ -32,6 +32,9 @@ export default ts.config(
     languageOptions: { parserOptions: { parser: ts.parser, svelteConfig } },
     rules: {
       'svelte/no-navigation-without-resolve': 'off',
+      // `void value;` names what an effect hangs on; plain maps hold what is not drawn.
+      '@typescript-eslint/no-meaningless-void-operator': 'off',
+      'svelte/prefer-svelte-reactivity': 'off',
       // Type-aware rules do not see through Svelte's compiled props.
       '@typescript-eslint/no-unsafe-assignment': 'off',
       '@typescript-eslint/no-unsafe-member-access': 'off',

@@ -94,17 +94,33 @@ async function respond(
     response.writeHead(status, { ...HEADERS, 'Content-Type': 'text/plain; charset=utf-8', ...headers });
     response.end(request.method === 'HEAD' ? undefined : body);
   };
-  if (!keeper.fromHere(request)) return answer(403, 'This address belongs to a local program.\n');
-  if (request.method !== 'GET' && request.method !== 'HEAD') return answer(405, 'Only GET.\n');
+  if (!keeper.fromHere(request)) {
+    answer(403, 'This address belongs to a local program.\n');
+    return;
+  }
+  if (request.method !== 'GET' && request.method !== 'HEAD') {
+    answer(405, 'Only GET.\n');
+    return;
+  }
   const url = new URL(request.url ?? '/', 'http://127.0.0.1');
   const token = url.searchParams.get('token');
   if (token !== null && !keeper.hasSession(request)) {
     const cookie = keeper.exchange(token);
-    if (cookie === undefined) return answer(403, 'This link was used already. Start Halosieve again for a new one.\n');
-    return answer(303, '', { 'Set-Cookie': cookie, Location: '/' });
+    if (cookie === undefined) {
+      answer(403, 'This link was used already. Start Halosieve again for a new one.\n');
+      return;
+    }
+    answer(303, '', { 'Set-Cookie': cookie, Location: '/' });
+    return;
   }
-  if (!keeper.hasSession(request)) return answer(403, 'Open the address that Halosieve printed.\n');
+  if (!keeper.hasSession(request)) {
+    answer(403, 'Open the address that Halosieve printed.\n');
+    return;
+  }
   const file = await windowFile(folder, url.pathname);
-  if (!file) return answer(404, 'There is no such page.\n');
+  if (!file) {
+    answer(404, 'There is no such page.\n');
+    return;
+  }
   answer(200, file.bytes, { 'Content-Type': file.type });
 }

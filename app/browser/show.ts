@@ -4,7 +4,7 @@ import { spawn } from 'node:child_process';
 export function showInBrowser(address: string): void {
   const [command, ...words] =
     process.platform === 'darwin' ? ['open'] : process.platform === 'win32' ? ['cmd', '/c', 'start', ''] : ['xdg-open'];
-  const child = spawn(command!, [...words, address], { stdio: 'ignore', detached: true });
+  const child = spawn(command, [...words, address], { stdio: 'ignore', detached: true });
   child.on('error', () => undefined);
   child.unref();
 }

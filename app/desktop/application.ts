@@ -36,11 +36,11 @@ export async function runApplication(
     app.quit();
     return;
   }
-  let window: BrowserWindow | undefined;
+  const shown: { window?: BrowserWindow } = {};
   const openPath = (path: string): void => void engine.handle('bench.open', { path }).catch(bug);
   app.on('second-instance', (_, words) => {
-    if (window?.isMinimized() === true) window.restore();
-    window?.focus();
+    if (shown.window?.isMinimized() === true) shown.window.restore();
+    shown.window?.focus();
     const path = words.slice(1).find((word) => /\.(halosieve\.)?json$|\.[ct]sv$/i.test(word));
     if (path !== undefined) openPath(path);
   });
@@ -66,9 +66,10 @@ export async function runApplication(
     await engine.handle('bench.new', {});
   });
   const seat = connectWindows(ipc, engine, bug);
-  window = createWindow(windowOptions(places.preload));
+  const window = createWindow(windowOptions(places.preload));
+  shown.window = window;
   lockNavigation(window.webContents);
   seat(window.webContents);
-  window.once('ready-to-show', () => window?.show());
+  window.once('ready-to-show', () => window.show());
   await window.loadURL(`${WINDOW_ORIGIN}/index.html`);
 }

@@ -200,18 +200,11 @@ export class Bench {
   async #stoppable<T>(work: (options: PrepareOptions) => Promise<T>): Promise<T> {
     const working = new AbortController();
     this.#working = working;
-    let told = false;
     try {
-      return await work({
-        signal: working.signal,
-        onProgress: (progress) => {
-          told = true;
-          this.#tell('progress', progress);
-        },
-      });
+      return await work({ signal: working.signal, onProgress: (progress) => this.#tell('progress', progress) });
     } finally {
       this.#working = undefined;
-      if (told) this.#tell('progress', undefined);
+      this.#tell('progress', undefined);
     }
   }
 

@@ -34,7 +34,10 @@ export function loadSource(
     };
     const stop = (): void =>
       finish(() => reject(new ProblemError([{ code: 'cancelled', severity: 'error', where: task.fileName }])));
-    if (options.signal?.aborted === true) return stop();
+    if (options.signal?.aborted === true) {
+      stop();
+      return;
+    }
     options.signal?.addEventListener('abort', stop);
     thread.on('message', (word: LoadWord) => {
       if (word.type === 'bytes') options.onBytes?.(word.soFar);

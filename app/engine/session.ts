@@ -81,8 +81,9 @@ async function stateOf(
   options: PrepareOptions,
 ): Promise<SourceState> {
   const old = before?.recipe.sources.find(({ id }) => id === source.id);
-  const same = old !== undefined && before?.folder === folder && readingKey(old) === readingKey(source);
-  const known = same ? before?.sources.get(source.id)?.file : undefined;
+  const same =
+    old !== undefined && before !== undefined && before.folder === folder && readingKey(old) === readingKey(source);
+  const known = same ? before.sources.get(source.id)?.file : undefined;
   if (known) return withState(source, known);
   try {
     return withState(source, await openSource(source, folder, options));

@@ -141,7 +141,8 @@ async function locate(
 async function hashOf(path: string): Promise<string | undefined> {
   const stream = hashedStream(path);
   try {
-    for await (const _ of stream.chunks);
+    const chunks = stream.chunks[Symbol.asyncIterator]();
+    while ((await chunks.next()).done !== true);
     return stream.digest();
   } catch {
     return undefined;

@@ -18,5 +18,5 @@ export function cutKind(kind: string): AnyCutKind {
   const found = CUT_KINDS.find((candidate) => candidate.kind === kind);
   if (found === undefined) throw new RangeError(`no cut of kind ${kind}`);
   // Sound because a recipe is validated against the schema of the same kind before its parameters get here.
-  return found as unknown as AnyCutKind;
+  return found;
 }

@@ -60,9 +60,13 @@ function inconsistencies(recipe: Recipe, fileName: string, lines: ReadonlyMap<st
       ids.indexOf(id) < at ? [about(`${list}[${at}].id`, `"${id}" a second time`, 'every id once')] : [],
     );
   });
-  if (solarFrame(recipe.frame)) return repeated;
   const known = SOLAR_FRAMES.map(({ id }) => id).join(', ');
-  return [...repeated, about('frame', `the unknown frame "${recipe.frame}"`, `one of ${known}`)];
+  const frame = solarFrame(recipe.frame)
+    ? []
+    : [about('frame', `the unknown frame "${recipe.frame}"`, `one of ${known}`)];
+  // A JavaScript object cannot hold this name: the alias would be lost in silence.
+  const lost = 'roster.aliases.__proto__';
+  return [...repeated, ...frame, ...(lines.has(lost) ? [about(lost, 'the name "__proto__"', 'another name')] : [])];
 }
 
 /**
@@ -72,9 +76,9 @@ function inconsistencies(recipe: Recipe, fileName: string, lines: ReadonlyMap<st
 export function recipeText(recipe: Recipe): string {
   const result = recipeSchema.safeParse(recipe);
   if (!result.success) throw new ProblemError(recipeProblems(result.error.issues, recipe, 'recipe', new Map()));
-  const { roster, ...rest } = result.data;
+  const { roster } = result.data;
   const aliases = Object.fromEntries(Object.entries(roster.aliases).sort(([a], [b]) => (a < b ? -1 : 1)));
-  return jsonText({ ...result.data, ...rest, roster: { ...roster, aliases } });
+  return jsonText({ ...result.data, roster: { ...roster, aliases } });
 }
 
 /** A recipe without sources and cuts: frame G18, R_V 3.1, one sigma of margin, three plates to begin with. */

@@ -1,11 +1,11 @@
 /** A seeded source of random numbers. */
 export interface Dice {
   /** Uniform in [0, 1). */
-  uniform(): number;
+  readonly uniform: () => number;
   /** Normal deviate of mean 0 and variance 1. */
-  normal(): number;
+  readonly normal: () => number;
   /** One of the list. */
-  pick<T>(list: readonly T[]): T;
+  readonly pick: <T>(list: readonly T[]) => T;
 }
 
 /**

@@ -1,7 +1,7 @@
 import { MEASURED, type MeasuredId } from '../table/role';
-import type { Identity } from './identify';
+import type { Identity } from './identity';
 import type { Conflict, ConflictValue, ReadSource, SettledColumn } from './roster';
-import { sigmaOf, usable, valueOf } from './settle';
+import { sigmaOf, usable, valueOf } from './values';
 
 /** Compared as they were settled; positions are compared on the sky, correlations not at all. */
 const COMPARED: readonly MeasuredId[] = MEASURED.map(({ id }) => id).filter(

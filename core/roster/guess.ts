@@ -26,7 +26,9 @@ export function guessMeanings(table: Table): Guess[] {
   const values = holders(first.filter(({ of }) => of === ''));
   const proposals = first.map((proposal) => companion(proposal, first, values));
   const taken = holders(proposals);
-  return proposals.map(({ rank: _, of: __, stated, ...proposal }) => {
+  return proposals.map((ranked) => {
+    const { column, role, unit, confidence, reason, stated } = ranked;
+    const proposal: Guess = { column, role, unit, confidence, reason };
     if (proposal.role === 'ignore') return proposal;
     const guess = stated ? proposal : inUnitOfValue(proposal, taken);
     const holder = taken.get(guess.role)!;

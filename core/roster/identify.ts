@@ -3,19 +3,12 @@ import type { Problem } from '../table/problem';
 import { cleanName } from './cleanname';
 import { condensed } from './condensed';
 import { withoutDuplicates } from './duplicates';
+import type { Identity } from './identity';
 import { matchRows } from './matchrows';
 import type { DuplicateRow, ReadSource } from './roster';
-import { placesOf, skyName } from './skyname';
+import { skyName } from './skyname';
 import type { RosterPolicy } from './sourcemap';
-
-/** One object: its row in each source, −1 where a source lacks it. */
-export interface Identity {
-  readonly key: string;
-  readonly name: string;
-  readonly rows: number[];
-  /** Cleaned names that its rows bear. */
-  readonly aka: string[];
-}
+import { valueOf } from './values';
 
 /** An object whose rows bear one name but stand further apart than the radius; `first` and `second` are sources. */
 export interface FarNamesake {
@@ -98,8 +91,13 @@ function farNamesake(
   radiusDeg: number,
 ): Omit<FarNamesake, 'object'> | undefined {
   const first = object.rows.findIndex((other) => other >= 0);
-  const [a, b] = [placesOf(sources[first]!, [object.rows[first]!]), placesOf(sources[second]!, [row])];
-  const apart = separationDeg(a.ra[0]!, a.dec[0]!, b.ra[0]!, b.dec[0]!);
+  const [from, other, to] = [sources[first]!, object.rows[first]!, sources[second]!];
+  const apart = separationDeg(
+    valueOf(from, other, 'ra'),
+    valueOf(from, other, 'dec'),
+    valueOf(to, row, 'ra'),
+    valueOf(to, row, 'dec'),
+  );
   return apart > radiusDeg ? { first, second, separationDeg: apart } : undefined;
 }
 

@@ -1,6 +1,6 @@
 import { equalWords } from '../table/arquero';
 import type { Problem } from '../table/problem';
-import type { Identity } from './identify';
+import type { Identity } from './identity';
 import type { ReadSource } from './roster';
 import { neighbours, type SkyPoints } from './skymatch';
 import { placesOf } from './skyname';

@@ -1,9 +1,11 @@
 import type { NumberColumn } from '../table/column';
 import { valueConflicts } from './conflicts';
-import { type Identification, identify, type Identity } from './identify';
+import { type Identification, identify } from './identify';
+import type { Identity } from './identity';
 import type { Conflict, ReadSource, Roster, SourceCount } from './roster';
-import { priorityOrder, settle, valueOf } from './settle';
+import { priorityOrder, settle } from './settle';
 import type { RosterPolicy } from './sourcemap';
+import { valueOf } from './values';
 
 /**
  * Merges sources into one roster with one row per object, in the order of the most trusted source and then of the

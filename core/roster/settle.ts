@@ -1,21 +1,27 @@
-import { givesDistance } from '../table/parallax';
 import type { MeasuredId } from '../table/role';
 import { MEASURED } from '../table/role';
-import type { Identity } from './identify';
+import type { Identity } from './identity';
 import type { ReadSource, SettledColumn } from './roster';
+import { usable, valueOf } from './values';
 
-/** Values that are taken from one source together; of a distance, the first kind that is there. */
-const GROUPS: readonly (readonly MeasuredId[])[] = [
-  ['ra', 'dec'],
-  ['distance_modulus', 'distance', 'parallax'],
-  ['pm_ra', 'pm_dec', 'pm_correlation'],
-  ['v_los'],
-  ['feh'],
-  ['ebv', 'a_v'],
+/** Values that are taken from one source together. */
+interface Group {
+  readonly ids: readonly MeasuredId[];
+  /** How many of the first ids a source must have, all of them, for the group to be there. */
+  readonly needed: number;
+  /** Of these kinds of one thing, only the first that is of use is taken. */
+  readonly oneOf: boolean;
+}
+
+const group = (needed: number, ...ids: MeasuredId[]): Group => ({ ids, needed, oneOf: false });
+const GROUPS: readonly Group[] = [
+  group(2, 'ra', 'dec'),
+  { ids: ['distance_modulus', 'distance', 'parallax'], needed: 0, oneOf: true },
+  group(2, 'pm_ra', 'pm_dec', 'pm_correlation'),
+  group(1, 'v_los'),
+  group(1, 'feh'),
+  group(0, 'ebv', 'a_v'),
 ];
-const ONE_OF = new Set<MeasuredId>(['distance_modulus', 'distance', 'parallax']);
-/** A group is there in a source when these are. */
-const NEEDED: Partial<Record<MeasuredId, readonly MeasuredId[]>> = { ra: ['ra', 'dec'], pm_ra: ['pm_ra', 'pm_dec'] };
 
 /** Source indices, most trusted first; sources that the priority does not name follow in their own order. */
 export function priorityOrder(sources: readonly ReadSource[], priority: readonly string[]): number[] {
@@ -36,17 +42,13 @@ export function settle(
   for (const { id } of MEASURED) {
     if (sources.some((source) => source.measured.columns.has(id))) settled.set(id, emptyColumn(objects.length));
   }
-  objects.forEach((object, index) => {
-    for (const group of GROUPS) {
-      const having = order.filter((candidate) => hasGroup(sources[candidate]!, object.rows[candidate]!, group));
-      const source =
-        having.find((candidate) => group.some((id) => usable(sources[candidate]!, object.rows[candidate]!, id))) ??
-        having[0];
-      if (source === undefined) continue;
-      const row = object.rows[source]!;
-      for (const id of present(sources[source]!, row, group)) copy(sources, source, row, id, settled.get(id)!, index);
+  for (const wanted of GROUPS) {
+    for (let index = 0; index < objects.length; index++) {
+      const { rows } = objects[index]!;
+      const source = bestSource(sources, rows, order, wanted);
+      if (source >= 0) take(sources, source, rows[source]!, wanted, settled, index);
     }
-  });
+  }
   return settled;
 }
 
@@ -62,48 +64,57 @@ function emptyColumn(size: number): SettledColumn {
   };
 }
 
-/** The value of a source's row, NaN when it has none. */
-export function valueOf(source: ReadSource, row: number, id: MeasuredId): number {
-  return row < 0 ? Number.NaN : (source.measured.columns.get(id)?.values[row] ?? Number.NaN);
+/** The first source that has the group in a form that is of use, else the first that has it at all; −1 for none. */
+function bestSource(
+  sources: readonly ReadSource[],
+  rows: readonly number[],
+  order: readonly number[],
+  wanted: Group,
+): number {
+  let having = -1;
+  for (const source of order) {
+    const row = rows[source]!;
+    if (row < 0 || !hasGroup(sources[source]!, row, wanted)) continue;
+    for (const id of wanted.ids) if (usable(sources[source]!, row, id)) return source;
+    if (having < 0) having = source;
+  }
+  return having;
 }
 
-function hasGroup(source: ReadSource, row: number, group: readonly MeasuredId[]): boolean {
-  const has = (id: MeasuredId): boolean => !Number.isNaN(valueOf(source, row, id));
-  return (NEEDED[group[0]!] ?? []).every(has) && group.some(has);
+function hasGroup(source: ReadSource, row: number, { ids, needed }: Group): boolean {
+  let found = 0;
+  for (let at = 0; at < ids.length; at++) {
+    if (!Number.isNaN(valueOf(source, row, ids[at]!))) found++;
+    else if (at < needed) return false;
+  }
+  return found > 0;
 }
 
-function present(source: ReadSource, row: number, group: readonly MeasuredId[]): readonly MeasuredId[] {
-  const there = group.filter((id) => !Number.isNaN(valueOf(source, row, id)));
-  if (!ONE_OF.has(group[0]!)) return there;
-  return [there.find((id) => usable(source, row, id)) ?? there[0]!];
-}
-
-/** Whether a value of a source's row is there and, if it is a distance or a parallax, of use as a distance. */
-export function usable(source: ReadSource, row: number, id: MeasuredId): boolean {
-  const value = valueOf(source, row, id);
-  if (id === 'distance') return value > 0;
-  if (id === 'parallax') return givesDistance(value, sigmaOf(source, row, id));
-  return !Number.isNaN(value);
-}
-
-/** The 1σ error of a source's row, NaN when it has none. */
-export function sigmaOf(source: ReadSource, row: number, id: MeasuredId): number {
-  return row < 0 ? Number.NaN : (source.measured.columns.get(id)?.sigma?.[row] ?? Number.NaN);
-}
-
-function copy(
+function take(
   sources: readonly ReadSource[],
   source: number,
   row: number,
-  id: MeasuredId,
-  to: SettledColumn,
+  { ids, oneOf }: Group,
+  settled: ReadonlyMap<MeasuredId, SettledColumn>,
   object: number,
 ): void {
-  const from = sources[source]!.measured.columns.get(id)!;
-  to.values[object] = from.values[row]!;
-  to.sigma![object] = from.sigma?.[row] ?? Number.NaN;
-  to.minus![object] = from.minus?.[row] ?? Number.NaN;
-  to.plus![object] = from.plus?.[row] ?? Number.NaN;
-  to.fromSource[object] = source;
-  to.fromLine[object] = sources[source]!.lines[row]!;
+  const from = sources[source]!;
+  const kind = oneOf
+    ? (ids.find((id) => usable(from, row, id)) ?? ids.find((id) => isThere(from, row, id)))
+    : undefined;
+  for (const id of ids) {
+    if (!isThere(from, row, id) || (oneOf && id !== kind)) continue;
+    const to = settled.get(id)!;
+    const { values, sigma, minus, plus } = from.measured.columns.get(id)!;
+    to.values[object] = values[row]!;
+    to.sigma![object] = sigma?.[row] ?? Number.NaN;
+    to.minus![object] = minus?.[row] ?? Number.NaN;
+    to.plus![object] = plus?.[row] ?? Number.NaN;
+    to.fromSource[object] = source;
+    to.fromLine[object] = from.lines[row]!;
+  }
+}
+
+function isThere(source: ReadSource, row: number, id: MeasuredId): boolean {
+  return !Number.isNaN(valueOf(source, row, id));
 }

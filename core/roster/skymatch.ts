@@ -1,5 +1,5 @@
 import { RAD } from '../frame/constants';
-import { separationDeg, wrapDeg } from '../frame/sphere';
+import { separationDeg, unitVector, wrapDeg } from '../frame/sphere';
 
 /** Directions on the sky, degrees. */
 export interface SkyPoints {
@@ -18,8 +18,12 @@ const LEAST_HEIGHT = 1 / 3600;
 /** Windows are this much wider than the radius, degrees, so that rounding loses no pair on the rim. */
 const PAD = 1e-9;
 
+/** No more neighbours of one point are kept; a radius far too wide then costs time, not all memory. */
+export const MOST_NEIGHBOURS = 8;
+
 /**
- * For every point of `a` the points of `b` within a radius (degrees, inclusive), nearest first.
+ * For every point of `a` the nearest points of `b` within a radius (degrees, inclusive), nearest first, at most
+ * MOST_NEIGHBOURS of them.
  *
  * Sweeps zones of declination with right ascension sorted in each, so that n points with few neighbours cost about
  * n log n wherever on the sky they crowd. Separations are great circles, which hold at the poles and across 0/360.
@@ -27,23 +31,37 @@ const PAD = 1e-9;
  */
 export function neighbours(a: SkyPoints, b: SkyPoints, radiusDeg: number): readonly Neighbour[][] {
   const zones = zonesOf(b, Math.max(radiusDeg, LEAST_HEIGHT));
+  const limit = (2 * Math.sin(Math.min(radiusDeg + PAD, 180) * (RAD / 2))) ** 2;
   return Array.from(a.dec, (dec, row) => {
     const found: Neighbour[] = [];
     const ra = a.ra[row]!;
     if (Number.isNaN(ra + dec)) return found;
+    const [x, y, z] = unitVector(ra, dec);
     const windows = raWindows(wrapDeg(ra), raReach(dec, radiusDeg));
     const last = zones.of(dec + radiusDeg + PAD);
     for (let zone = zones.of(dec - radiusDeg - PAD); zone <= last; zone++) {
       for (const [from, to] of windows) {
         for (let at = zones.firstFrom(zone, from); zones.zone[at] === zone && zones.ra[at]! <= to; at++) {
+          const chord = (zones.x[at]! - x) ** 2 + (zones.y[at]! - y) ** 2 + (zones.z[at]! - z) ** 2;
+          if (chord > limit) continue;
           const index = zones.row[at]!;
           const apart = separationDeg(ra, dec, b.ra[index]!, b.dec[index]!);
-          if (apart <= radiusDeg) found.push({ index, separationDeg: apart });
+          if (apart <= radiusDeg) insert(found, { index, separationDeg: apart });
         }
       }
     }
-    return found.sort((p, q) => p.separationDeg - q.separationDeg || p.index - q.index);
+    return found;
   });
+}
+
+function insert(found: Neighbour[], candidate: Neighbour): void {
+  const before = (p: Neighbour, q: Neighbour): boolean =>
+    p.separationDeg < q.separationDeg || (p.separationDeg === q.separationDeg && p.index < q.index);
+  let at = found.length;
+  while (at > 0 && before(candidate, found[at - 1]!)) at--;
+  if (at === MOST_NEIGHBOURS) return;
+  found.splice(at, 0, candidate);
+  if (found.length > MOST_NEIGHBOURS) found.pop();
 }
 
 /** Points in the order of zone, then right ascension. */
@@ -51,6 +69,10 @@ interface Zones {
   readonly row: Int32Array;
   readonly zone: Int32Array;
   readonly ra: Float64Array;
+  /** Unit vectors: their squared distance is a quick first test. */
+  readonly x: Float64Array;
+  readonly y: Float64Array;
+  readonly z: Float64Array;
   of(dec: number): number;
   /** Place of the first point of a zone at or beyond a right ascension; where it would stand if there is none. */
   firstFrom(zone: number, ra: number): number;
@@ -73,7 +95,9 @@ function zonesOf({ ra, dec }: SkyPoints, height: number): Zones {
     }
     return from;
   };
-  return { row, zone, ra: sorted, of, firstFrom };
+  const [x, y, z] = [0, 1, 2].map(() => new Float64Array(row.length)) as [Float64Array, Float64Array, Float64Array];
+  row.forEach((index, at) => ([x[at], y[at], z[at]] = unitVector(ra[index]!, dec[index]!)));
+  return { row, zone, ra: sorted, x, y, z, of, firstFrom };
 }
 
 /** How far in right ascension a circle about a point reaches, degrees; 180 when it holds a pole. */

@@ -1,5 +1,6 @@
 import type { ReadSource } from './roster';
 import type { SkyPoints } from './skymatch';
+import { valueOf } from './values';
 
 /** Where rows of a source stand on the sky; NaN where it does not say. */
 export function placesOf(source: ReadSource, rows: readonly number[]): SkyPoints {
@@ -15,6 +16,6 @@ export function placesOf(source: ReadSource, rows: readonly number[]): SkyPoints
  * declination in degrees, e.g. "deep J187.7059+12.3911".
  */
 export function skyName(source: ReadSource, row: number): string {
-  const { ra, dec } = placesOf(source, [row]);
-  return `${source.id} J${ra[0]!.toFixed(4)}${dec[0]! < 0 ? '' : '+'}${dec[0]!.toFixed(4)}`;
+  const [ra, dec] = [valueOf(source, row, 'ra'), valueOf(source, row, 'dec')];
+  return `${source.id} J${ra.toFixed(4)}${dec < 0 ? '' : '+'}${dec.toFixed(4)}`;
 }

@@ -97,12 +97,10 @@ export function unitFactor(text: string, dimension: Dimension): number | undefin
   if (parsed === undefined || canonical === undefined) return undefined;
   const bare = dimension === 'magnitude' || dimension === 'dex';
   if (bare && same(parsed.powers, NONE)) return parsed.factor;
-  return same(parsed.powers, canonical.powers) ? parsed.factor / canonical.factor : undefined;
-}
-
-/** Whether the text is a unit that the tool understands, of whatever dimension. */
-export function knownUnit(text: string): boolean {
-  return SEXAGESIMAL.has(text) || parseUnit(text) !== undefined;
+  if (!same(parsed.powers, canonical.powers)) return undefined;
+  const factor = parsed.factor / canonical.factor;
+  // Another spelling of the canonical unit must leave numbers as they are, to the last bit.
+  return Math.abs(factor - 1) < 1e-14 ? 1 : factor;
 }
 
 function same(a: Powers, b: Powers): boolean {

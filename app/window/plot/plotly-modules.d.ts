@@ -1,7 +1,6 @@
 // The parts of plotly.js that the window uses; the package's own types describe only the full bundle.
 declare module 'plotly.js/lib/core' {
-  import type { PlotlyCore } from './types';
-  const core: PlotlyCore;
+  const core: unknown;
   export default core;
 }
 declare module 'plotly.js/lib/heatmap' {

@@ -1,6 +1,8 @@
-import Plotly from 'plotly.js/lib/core';
+import core from 'plotly.js/lib/core';
 import heatmap from 'plotly.js/lib/heatmap';
-import type { Drawn, PlotElement } from './types';
+import type { Drawn, PlotElement, PlotlyCore } from './types';
+
+const Plotly = core as PlotlyCore;
 
 // plotly lays out axes, zoom and the drawing of shapes; the marks are drawn by us, because redrawing its own marks
 // takes tens of milliseconds a plate. The heat map is there for plates of very many objects.

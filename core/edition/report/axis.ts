@@ -22,11 +22,15 @@ export function axisOf(values: Iterable<number>, unit: string): Axis {
     if (value > greatest) greatest = value;
   }
   if (!(least <= greatest)) [least, greatest] = [0, 1];
-  const margin = least === greatest ? Math.max(Math.abs(least) * 0.05, 0.5) : (greatest - least) * 0.04;
+  const size = Math.max(Math.abs(least), Math.abs(greatest));
+  // Closer values than this would want ticks that doubles cannot tell apart.
+  const same = greatest - least <= 1e-9 * size;
+  const margin = same ? Math.max(size * 0.05, 0.5) : (greatest - least) * 0.04;
   const [min, max] = [least - margin, greatest + margin];
   const step = stepOf((max - min) / 6, unit);
   const ticks: number[] = [];
-  for (let at = Math.ceil(min / step); at * step <= max; at++) ticks.push(at * step);
+  // Adding 0 turns −0 into 0.
+  for (let at = Math.ceil(min / step); at * step <= max; at++) ticks.push(at * step + 0);
   return { min, max, ticks, places: Math.max(0, -Math.floor(Math.log10(step) + 1e-9)) };
 }
 

@@ -20,7 +20,7 @@ export function svgLabel(definition: QuantityDefinition): Html {
   const unit = definition.unit === '' ? '' : ` (${unitText(definition.unit)})`;
   const parts = SUBSCRIPT.exec(definition.label);
   if (!parts) return html`${definition.label}${unit}`;
-  return html`${parts[1]!}<tspan class="low" dy="4">${parts[2]!}</tspan><tspan dy="-4">${unit}</tspan>`;
+  return html`${parts[1]}<tspan class="low" dy="4">${parts[2]}</tspan><tspan dy="-4">${unit}</tspan>`;
 }
 
 /** Label of a quantity without unit in plain text. */

@@ -31,7 +31,7 @@ const ENTITIES: Readonly<Record<string, string>> = {
 };
 
 /** Characters that neither HTML nor XML may hold. */
-// eslint-disable-next-line no-control-regex -- they are what has to go
+
 const FORBIDDEN = /[\u0000-\u0008\u000b\u000c\u000e-\u001f\u007f\ufffe\uffff]/g;
 
 function escaped(text: string): string {

@@ -61,7 +61,7 @@ function marks(field: Field, drawn: readonly number[], x: Float64Array, y: Float
     if (objects.length === 0) return undefined;
     if (!titled) return html`<path class="mark ${id}" d="${objects.map((object) => at(object) + path).join('')}" />`;
     return html`<g class="mark ${id}"
-      >${objects.map((object) => html`<path d="${at(object)}${path}"><title>${input.roster.names[object]!}</title></path>`)}</g
+      >${objects.map((object) => html`<path d="${at(object)}${path}"><title>${input.roster.names[object]}</title></path>`)}</g
     >`;
   })}`;
 }
