@@ -72,6 +72,7 @@ export default ts.config(
       'max-lines': ['error', { max: 400 }],
       '@typescript-eslint/no-unsafe-assignment': 'off',
       '@typescript-eslint/no-unsafe-member-access': 'off',
+      '@typescript-eslint/no-unsafe-call': 'off',
     },
   },
   { files: ['**/*.js', '**/*.mjs'], ...ts.configs.disableTypeChecked },

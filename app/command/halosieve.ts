@@ -44,7 +44,7 @@ async function runCommand(command: Command, args: string[]): Promise<number> {
   const progress = progressLine(process.stderr);
   try {
     const { values, positionals } = parseArgs({
-      args,
+      args: joinedNegatives(args, command),
       options: { ...COMMON, ...command.options },
       allowPositionals: true,
     });
@@ -68,6 +68,15 @@ async function runCommand(command: Command, args: string[]): Promise<number> {
   } finally {
     progress.clear();
   }
+}
+
+/** Joins an option with a value like -99.9 or --, which would otherwise be taken for an option itself. */
+function joinedNegatives(args: readonly string[], { options }: Command): string[] {
+  return args.reduce<string[]>((joined, word) => {
+    const before = joined.at(-1);
+    const takesText = before?.startsWith('--') === true && options[before.slice(2)]?.type === 'string';
+    return takesText && /^-+[\d.]*$/.test(word) ? [...joined.slice(0, -1), `${before}=${word}`] : [...joined, word];
+  }, []);
 }
 
 function failed(error: unknown): number {

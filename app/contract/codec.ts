@@ -13,8 +13,8 @@ const KINDS = {
 type Kind = keyof typeof KINDS;
 type Numbers = InstanceType<(typeof KINDS)[Kind]>;
 
-/** Marks what JSON cannot hold; no other object of the contract has this key. */
-const MARK = '$';
+/** Key that marks what JSON cannot hold: a NUL, which no name read from a text file can be. */
+const MARK = '\u0000';
 /** Typed arrays begin at multiples of this, as a Float64Array must. */
 const ALIGN = 8;
 

@@ -47,7 +47,7 @@ export function seatWindow(engine: Served, send: (packet: Packet) => void, bug: 
         send({
           type: 'refusal',
           id,
-          problems: worded([{ code: 'unknown-option', severity: 'error', found: `the request ${String(name)}` }]),
+          problems: worded([{ code: 'unknown-option', severity: 'error', found: `the request ${name}` }]),
         });
         return;
       }

@@ -3,7 +3,7 @@ import { describe, expect, it } from 'vitest';
 import { readDelimited } from '../../../../core/formats/csv/read';
 import { csvText } from '../../../../core/formats/csv/write';
 import { cellText, numberColumn, textColumn } from '../../../../core/table/column';
-import { ProblemError } from '../../../../core/table/problem';
+import type { ProblemError } from '../../../../core/table/problem';
 import { columnNamed } from '../../../../core/table/table';
 import type { DelimitedFile } from '../../../../core/formats/csv/file';
 
