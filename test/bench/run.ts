@@ -5,7 +5,7 @@ import { pathToFileURL } from 'node:url';
 
 interface Bench {
   readonly name: string;
-  run(): Promise<string[][]>;
+  readonly run: () => Promise<string[][]>;
 }
 
 for (const file of readdirSync(import.meta.dirname).filter((name) => name.endsWith('.bench.ts'))) {
