@@ -45,7 +45,14 @@ function invented(): Judged {
   return judgedObjects(set, [], []);
 }
 
-const common = { on: true, missing: 'unjudged', rationale: '', evidence: [] as string[], author: '', time: '' } as const;
+const common = {
+  on: true,
+  missing: 'unjudged',
+  rationale: '',
+  evidence: [] as string[],
+  author: '',
+  time: '',
+} as const;
 
 const BAND: [number, number][] = Array.from({ length: 60 }, (_, at) => {
   const turn = (2 * Math.PI * at) / 60;
