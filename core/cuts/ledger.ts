@@ -66,7 +66,12 @@ function verdictSets(rows: number, enabled: readonly Outcome[]): VerdictSets {
 function verdictCodes(rows: number, sets: VerdictSets): Uint8Array {
   const codes = new Uint8Array(rows);
   VERDICTS.forEach((verdict, code) => {
-    if (code !== 0) for (const row of sets[verdict].rows()) codes[row] = code;
+    if (code === 0) return;
+    const { words } = sets[verdict];
+    for (let word = 0; word < words.length; word++) {
+      for (let bits = words[word]!; bits !== 0; bits &= bits - 1)
+        codes[(word << 5) + 31 - Math.clz32(bits & -bits)] = code;
+    }
   });
   return codes;
 }

@@ -10,13 +10,17 @@ export function skyBasis(m: Rotation, raDeg: number, decDeg: number, basis: Floa
   const ca = Math.cos(raDeg * RAD);
   const sd = Math.sin(decDeg * RAD);
   const cd = Math.cos(decDeg * RAD);
-  for (let axis = 0; axis < 3; axis++) {
-    const mx = m[3 * axis]!;
-    const my = m[3 * axis + 1]!;
-    const mz = m[3 * axis + 2]!;
-    const level = mx * ca + my * sa;
-    basis[axis] = cd * level + sd * mz;
-    basis[3 + axis] = my * ca - mx * sa;
-    basis[6 + axis] = cd * mz - sd * level;
-  }
+  // Written out: an inner loop over the axes costs as much as the trigonometry.
+  const x = m[0] * ca + m[1] * sa;
+  const y = m[3] * ca + m[4] * sa;
+  const z = m[6] * ca + m[7] * sa;
+  basis[0] = cd * x + sd * m[2];
+  basis[1] = cd * y + sd * m[5];
+  basis[2] = cd * z + sd * m[8];
+  basis[3] = m[1] * ca - m[0] * sa;
+  basis[4] = m[4] * ca - m[3] * sa;
+  basis[5] = m[7] * ca - m[6] * sa;
+  basis[6] = cd * m[2] - sd * x;
+  basis[7] = cd * m[5] - sd * y;
+  basis[8] = cd * m[8] - sd * z;
 }

@@ -1,6 +1,5 @@
 import { RAD } from '../frame/constants';
 import { GALACTIC_FROM_ICRS } from '../frame/galactic';
-import { direction } from '../frame/sphere';
 import { skyBasis } from '../frame/skybasis';
 import type { MeasuredTable } from '../table/measured';
 import type { QuantityColumn } from './quantity';
@@ -14,12 +13,15 @@ export function galacticColumns(table: MeasuredTable): { l: QuantityColumn; b: Q
   if (!ra || !dec) return undefined;
   const column = (): Float64Array => new Float64Array(table.rows);
   const [l, b, sigmaL, sigmaB] = [column(), column(), column(), column()];
+  const known = ra.sigma !== undefined && dec.sigma !== undefined;
   const basis = new Float64Array(9);
   for (let row = 0; row < table.rows; row++) {
     skyBasis(GALACTIC_FROM_ICRS, ra.values[row]!, dec.values[row]!, basis);
-    const [lon, lat] = direction([basis[0]!, basis[1]!, basis[2]!]);
-    l[row] = lon;
+    const turn = Math.atan2(basis[1]!, basis[0]!) / RAD;
+    const lat = Math.atan2(basis[2]!, Math.sqrt(basis[0]! * basis[0]! + basis[1]! * basis[1]!)) / RAD;
+    l[row] = turn < 0 ? turn + 360 : turn;
     b[row] = lat;
+    if (!known) continue;
     // The Galactic z component of east and north is cos b times the sine and cosine of the angle between the axes.
     const cosB = Math.cos(lat * RAD);
     const [sin, cos] = [basis[5]! / cosB, basis[8]! / cosB];
@@ -27,6 +29,5 @@ export function galacticColumns(table: MeasuredTable): { l: QuantityColumn; b: Q
     sigmaL[row] = Math.hypot(cos * east, sin * north) / cosB;
     sigmaB[row] = Math.hypot(sin * east, cos * north);
   }
-  const known = ra.sigma !== undefined && dec.sigma !== undefined;
   return { l: { values: l, sigma: known ? sigmaL : undefined }, b: { values: b, sigma: known ? sigmaB : undefined } };
 }

@@ -5,6 +5,8 @@ export interface Kernel {
   /** Whether the value hangs on the velocity. */
   readonly moving: boolean;
   value(phase: Phase, row: number): number;
+  /** The whole column, where the state already holds it. */
+  column?(phase: Phase): Float64Array;
   /** Writes the six derivatives. */
   gradient(phase: Phase, row: number, to: Float64Array): void;
 }

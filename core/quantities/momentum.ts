@@ -17,7 +17,9 @@ function lUp(p: Phase, i: number): number {
 }
 
 function lTotal(p: Phase, i: number): number {
-  const [x, y, z] = [lX(p, i), lY(p, i), lUp(p, i)];
+  const x = lX(p, i);
+  const y = lY(p, i);
+  const z = lUp(p, i);
   return Math.sqrt(x * x + y * y + z * z);
 }
 
@@ -50,7 +52,7 @@ export const MOMENTUM_KERNELS = {
   },
   pole_b: {
     moving: true,
-    value: (p, i) => Math.atan2(lUp(p, i), Math.sqrt(lX(p, i) ** 2 + lY(p, i) ** 2)) / RAD,
+    value: (p, i) => Math.atan2(lUp(p, i), Math.sqrt(lX(p, i) * lX(p, i) + lY(p, i) * lY(p, i))) / RAD,
     gradient(p, i, to) {
       const [x, y, z] = [lX(p, i), lY(p, i), lUp(p, i)];
       const level = Math.sqrt(x * x + y * y);

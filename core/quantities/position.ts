@@ -15,6 +15,7 @@ function component(id: 'x' | 'y' | 'z' | 'vX' | 'vY' | 'vZ', axis: number): Kern
   return {
     moving: axis > 2,
     value: (p, i) => p[id][i]!,
+    column: (p) => p[id],
     gradient(_, __, to) {
       to.fill(0);
       to[axis] = 1;

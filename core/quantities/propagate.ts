@@ -4,6 +4,8 @@ import type { Kernel } from './kernel';
 
 /** Values of a quantity, one per row. */
 export function valuesOf(kernel: Kernel, phase: Phase): Float64Array {
+  const there = kernel.column?.(phase);
+  if (there) return there;
   const values = new Float64Array(phase.rows);
   for (let row = 0; row < phase.rows; row++) values[row] = kernel.value(phase, row);
   return values;

@@ -19,7 +19,8 @@ function vTheta(p: Phase, i: number): number {
 }
 
 function vTangential(p: Phase, i: number): number {
-  const [theta, phi] = [vTheta(p, i), vPhi(p, i)];
+  const theta = vTheta(p, i);
+  const phi = vPhi(p, i);
   return Math.sqrt(theta * theta + phi * phi);
 }
 
@@ -28,7 +29,9 @@ function speed(p: Phase, i: number): number {
 }
 
 function toomreSpeed(p: Phase, i: number): number {
-  const [out, turn, up] = [vCylR(p, i), vPhi(p, i) - p.lsrSpeedKmS, p.vZ[i]!];
+  const out = vCylR(p, i);
+  const turn = vPhi(p, i) - p.lsrSpeedKmS;
+  const up = p.vZ[i]!;
   return Math.sqrt(out * out + turn * turn + up * up);
 }
 
