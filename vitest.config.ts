@@ -2,6 +2,9 @@ import { svelte } from '@sveltejs/vite-plugin-svelte';
 import { svelteTesting } from '@testing-library/svelte/vite';
 import { defineConfig } from 'vitest/config';
 
+// A loaded machine may take its time; what is waited for still has to come.
+const PATIENT = { poll: { timeout: 20_000 } };
+
 export default defineConfig({
   test: {
     projects: [
@@ -11,7 +14,8 @@ export default defineConfig({
           environment: 'node',
           include: ['test/**/*.test.ts'],
           exclude: ['test/app/window/**', 'test/e2e/**'],
-          testTimeout: 30_000,
+          testTimeout: 60_000,
+          expect: PATIENT,
         },
       },
       {
@@ -24,6 +28,7 @@ export default defineConfig({
           environment: 'node',
           include: ['test/e2e/**/*.test.ts'],
           testTimeout: 120_000,
+          expect: PATIENT,
           hookTimeout: 120_000,
           fileParallelism: false,
         },
