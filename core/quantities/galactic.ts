@@ -13,7 +13,8 @@ export function galacticColumns(table: MeasuredTable): { l: QuantityColumn; b: Q
   if (!ra || !dec) return undefined;
   const column = (): Float64Array => new Float64Array(table.rows);
   const [l, b, sigmaL, sigmaB] = [column(), column(), column(), column()];
-  const known = ra.sigma !== undefined && dec.sigma !== undefined;
+  const [sigmaRa, sigmaDec] = [ra.sigma, dec.sigma];
+  const known = sigmaRa !== undefined && sigmaDec !== undefined;
   const basis = new Float64Array(9);
   for (let row = 0; row < table.rows; row++) {
     skyBasis(GALACTIC_FROM_ICRS, ra.values[row]!, dec.values[row]!, basis);
@@ -25,7 +26,7 @@ export function galacticColumns(table: MeasuredTable): { l: QuantityColumn; b: Q
     // The Galactic z component of east and north is cos b times the sine and cosine of the angle between the axes.
     const cosB = Math.cos(lat * RAD);
     const [sin, cos] = [basis[5]! / cosB, basis[8]! / cosB];
-    const [east, north] = [ra.sigma?.[row] ?? Number.NaN, dec.sigma?.[row] ?? Number.NaN];
+    const [east, north] = [sigmaRa[row]!, sigmaDec[row]!];
     sigmaL[row] = Math.hypot(cos * east, sin * north) / cosB;
     sigmaB[row] = Math.hypot(sin * east, cos * north);
   }
