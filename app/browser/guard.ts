@@ -23,8 +23,8 @@ export function guard(port: number): Guard {
   return {
     token,
     fromHere({ headers }) {
-      if (!hosts.has(headers.host ?? '')) return false;
-      return headers.origin === undefined || hosts.has(headers.origin.replace(/^http:\/\//, ''));
+      const { host = '', origin } = headers;
+      return hosts.has(host) && (origin === undefined || origin === `http://${host}`);
     },
     hasSession: ({ headers }) => same(cookieOf(headers.cookie, cookie), session),
     exchange(given) {

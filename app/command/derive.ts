@@ -1,3 +1,4 @@
+import { stat } from 'node:fs/promises';
 import { z } from 'zod';
 import { SOLAR_FRAMES, solarFrame } from '../../core/frame/solarframes';
 import { columnMeaning, type ColumnMeaning } from '../../core/roster/sourcemap';
@@ -33,6 +34,10 @@ export const derive: Command = {
   async run({ words, values, print, note, onProgress, signal }) {
     const out = text(values, 'out');
     if (out === undefined) throw new UsageError('derive wants --out OUT.csv');
+    if (await sameFile(words[0]!, out))
+      throw new UsageError(
+        `--out ${out} is the input itself; choose another name, so that the catalogue stays as it is`,
+      );
     const id = text(values, 'frame', 'G18');
     const frame = solarFrame(id);
     if (!frame)
@@ -63,6 +68,12 @@ export const derive: Command = {
     return 0;
   },
 };
+
+/** Whether two paths are one file, by whatever names and links. */
+async function sameFile(a: string, b: string): Promise<boolean> {
+  const [one, other] = await Promise.all([a, b].map((path) => stat(path, { bigint: true }).catch(() => undefined)));
+  return one !== undefined && other !== undefined && one.ino === other.ino && one.dev === other.dev;
+}
 
 async function readRoles(path: string): Promise<ColumnMeaning[]> {
   try {

@@ -31,11 +31,13 @@ export const freeze: Command = {
   },
 };
 
+/** The time that was given, else SOURCE_DATE_EPOCH (seconds since 1970), else now. */
 function statedTime(given: string | undefined): string {
   const epoch = process.env['SOURCE_DATE_EPOCH'];
-  const time =
-    given !== undefined ? new Date(given) : epoch === undefined ? new Date() : new Date(1000 * Number(epoch));
-  if (Number.isNaN(time.getTime()))
+  if (given === undefined && !epoch) return new Date().toISOString();
+  const time = new Date(given ?? 1000 * Number(epoch));
+  // JavaScript takes many a text for a date; a year, month and day have to stand there.
+  if (Number.isNaN(time.getTime()) || (given !== undefined && !/^\d{4}-\d{2}-\d{2}/.test(given)))
     throw new UsageError(`"${given ?? epoch ?? ''}" is no time; write it as 2026-01-31T12:00:00Z`);
   return time.toISOString();
 }

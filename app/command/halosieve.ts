@@ -4,28 +4,22 @@ import { problemText } from '../../core/table/wording';
 import { apply } from './apply';
 import { type Command, UsageError } from './command';
 import { derive } from './derive';
+import { faultLines } from './fault';
 import { freeze } from './freeze';
 import { inspect } from './inspect';
 import { open } from './open';
+import { standardOutput } from './output';
 import { progressLine } from './progressline';
+import { stopper } from './stopper';
 import { verify } from './verify';
 import { VERSION } from './version';
 
 const COMMANDS: readonly Command[] = [inspect, derive, apply, freeze, verify, open];
 const COMMON = { json: { type: 'boolean' }, help: { type: 'boolean', short: 'h' } } as const;
 
-process.stdout.on('error', (error: NodeJS.ErrnoException) => {
-  // The reader of a pipe went away: there is nobody left to tell.
-  if (error.code === 'EPIPE') process.exit(0);
-  throw error;
-});
-
-const stop = new AbortController();
-process.once('SIGINT', () => stop.abort());
-process.once('SIGTERM', () => stop.abort());
-
-const print = (line: string): void => void process.stdout.write(`${line}\n`);
-const note = (line: string): void => void process.stderr.write(`${line}\n`);
+const progress = progressLine(process.stderr);
+const { print, note } = standardOutput(progress.clear);
+const stop = stopper(note);
 
 process.exitCode = await main(process.argv.slice(2));
 
@@ -41,7 +35,6 @@ async function main([name, ...rest]: readonly string[]): Promise<number> {
 }
 
 async function runCommand(command: Command, args: string[]): Promise<number> {
-  const progress = progressLine(process.stderr);
   try {
     const { values, positionals } = parseArgs({
       args: joinedNegatives(args, command),
@@ -57,13 +50,12 @@ async function runCommand(command: Command, args: string[]): Promise<number> {
     return await command.run({
       words: positionals,
       values,
-      signal: stop.signal,
+      signal: stop,
       onProgress: progress.show,
       print,
       note,
     });
   } catch (error) {
-    progress.clear();
     return failed(error);
   } finally {
     progress.clear();
@@ -87,11 +79,7 @@ function failed(error: unknown): number {
     for (const problem of error.problems) note(problemText(problem));
     return error.problems.some(({ code }) => code === 'cancelled') ? 130 : 1;
   }
-  note(`halosieve failed: ${error instanceof Error ? error.message : String(error)}`);
-  note(
-    'This is a fault of the program. Please report it with what you did; HALOSIEVE_DEBUG=1 shows where it happened.',
-  );
-  if (process.env['HALOSIEVE_DEBUG'] === '1' && error instanceof Error) note(error.stack ?? '');
+  faultLines(error).forEach(note);
   return 1;
 }
 

@@ -1,3 +1,4 @@
+import { fail } from '../../core/table/problem';
 import { problemText } from '../../core/table/wording';
 import { inspectFile, type Inspection } from '../engine/inspectfile';
 import { type Command, texts } from './command';
@@ -16,10 +17,12 @@ export const inspect: Command = {
     '  problems[{code, severity, where, line, column, found, expected, count, text}]',
   ],
   words: [1, 1],
-  async run({ words, values, print, onProgress }) {
+  async run({ words, values, print, onProgress, signal }) {
     const path = words[0]!;
-    const onBytes = (soFar: number): void =>
+    const onBytes = (soFar: number): void => {
+      if (signal.aborted) fail('cancelled', { where: path });
       onProgress({ label: `Reading ${path} (${(soFar / 1e6).toFixed(0)} MB)`, share: undefined });
+    };
     const found = await inspectFile(path, { missing: texts(values, 'missing'), onBytes });
     if (values['json']) {
       const problems = found.problems.map((problem) => ({ ...problem, text: problemText(problem) }));

@@ -1,14 +1,16 @@
-import { spawn } from 'node:child_process';
 import { once } from 'node:events';
 import { existsSync } from 'node:fs';
 import { join, resolve } from 'node:path';
-import { serveWindow } from '../browser/server';
-import { showInBrowser } from '../browser/show';
+import { serveWindow, type WindowServer } from '../browser/server';
+import { mayShowBrowser, showInBrowser } from '../browser/show';
+import type { Progress } from '../contract/messages';
 import { findElectron, hasDisplay } from '../desktop/findelectron';
+import { runElectron } from '../desktop/runelectron';
 import { defaultStateFolder } from '../engine/statefolder';
 import { startEngineThread } from '../engine/thread';
 import { fail } from '../../core/table/problem';
 import { type Command, type Invocation, text, UsageError } from './command';
+import { faultLines } from './fault';
 import { PACKAGE_FOLDER } from './package';
 import { VERSION } from './version';
 
@@ -25,66 +27,73 @@ export const open: Command = {
   ],
   words: [0, 1],
   async run(invocation) {
-    const { words, values, note } = invocation;
-    const path = resolve(words[0] ?? join(PACKAGE_FOLDER, 'samples', 'demo.halosieve.json'));
+    const { words, values, note, signal } = invocation;
+    const port = portOf(text(values, 'port'));
+    const asked = words[0] === undefined ? undefined : resolve(words[0]);
+    const path = asked ?? join(PACKAGE_FOLDER, 'samples', 'demo.halosieve.json');
     if (!existsSync(path)) fail('file-missing', { where: path });
-    const electron = findElectron(PACKAGE_FOLDER);
-    if (values['browser'] !== true && electron !== undefined && hasDisplay())
-      return inElectron(electron, path, invocation.signal);
     if (values['browser'] !== true) {
-      note(
+      const electron = findElectron(PACKAGE_FOLDER);
+      const why =
         electron === undefined
-          ? 'Electron’s binary is not here: using the local browser.'
-          : 'There is no display: using the local browser.',
-      );
+          ? 'Electron’s binary is not here'
+          : hasDisplay()
+            ? await runElectron(electron, PACKAGE_FOLDER, asked, signal)
+            : 'There is no display';
+      if (why === undefined) return 0;
+      note(`${why}: using the local browser.`);
     }
-    return inBrowser(path, portOf(text(values, 'port')), invocation);
+    return inBrowser(path, port, invocation);
   },
 };
-
-async function inElectron(binary: string, path: string, signal: AbortSignal): Promise<number> {
-  const child = spawn(binary, [join(PACKAGE_FOLDER, 'out/main/desktop.js'), path], { stdio: 'inherit' });
-  signal.addEventListener('abort', () => child.kill());
-  const [code] = (await once(child, 'exit')) as [number | null];
-  return code ?? 0;
-}
 
 async function inBrowser(
   path: string,
   port: number | undefined,
-  { signal, values, print, note }: Invocation,
+  { signal, values, onProgress, print, note }: Invocation,
 ): Promise<number> {
   const engine = startEngineThread({ stateFolder: defaultStateFolder(), version: VERSION });
+  const stopWork = (): void => void engine.handle('work.stop', {}).catch(() => undefined);
+  signal.addEventListener('abort', stopWork);
   try {
+    const deafen = engine.listen((name, data) => {
+      if (name === 'progress' && data) onProgress(data as Progress);
+    });
     await engine.handle('bench.open', { path });
+    deafen();
+    if (signal.aborted) fail('cancelled', { where: path });
     const server = await serveWindow(engine, {
       windowFolder: join(PACKAGE_FOLDER, 'out/window'),
       port,
-      bug: (error) => note(`The engine failed: ${error instanceof Error ? error.message : String(error)}`),
+      bug: (error) => faultLines(error).forEach(note),
     }).catch((error: unknown) => {
       if ((error as NodeJS.ErrnoException).code === 'EADDRINUSE')
         throw new UsageError(`port ${port ?? 0} is taken; choose another with --port`);
       throw error;
     });
     if (values['json'] === true) print(JSON.stringify({ address: server.address, port: server.port, recipe: path }));
-    else {
-      print(`Halosieve is open at ${server.address}`);
-      print(
-        'The link works once; a second window needs the same browser. Ctrl-C closes the bench; unsaved work is kept.',
-      );
-      if (process.env['SSH_CONNECTION'] !== undefined) {
-        print(
-          `From your own machine: ssh -L ${server.port}:127.0.0.1:${server.port} THIS-HOST, then open the link there.`,
-        );
-      }
-    }
-    if (hasDisplay() && process.env['CI'] === undefined) showInBrowser(server.address);
-    if (!signal.aborted) await once(signal, 'abort');
+    else for (const line of welcome(server)) print(line);
+    if (mayShowBrowser(hasDisplay())) showInBrowser(server.address);
+    await aborted(signal);
     await server.close();
     return 0;
   } finally {
     await engine.close();
   }
+}
+
+async function aborted(signal: AbortSignal): Promise<void> {
+  if (!signal.aborted) await once(signal, 'abort');
+}
+
+function welcome({ address, port }: WindowServer): string[] {
+  return [
+    `Halosieve is open at ${address}`,
+    'The link works once; a second window needs the same browser. Ctrl-C closes the bench; unsaved work is kept.',
+    ...(process.env['SSH_CONNECTION']
+      ? [`From your own machine: ssh -L ${port}:127.0.0.1:${port} THIS-HOST, then open the link there.`]
+      : []),
+  ];
 }
 
 function portOf(given: string | undefined): number | undefined {

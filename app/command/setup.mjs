@@ -22,10 +22,16 @@ else test();
 function install() {
   const stamp = join(root, 'node_modules/.halosieve-installed');
   const lock = hash(['package-lock.json']);
-  if (existsSync(stamp) && readFileSync(stamp, 'utf8') === lock) return;
+  if (existsSync(stamp) ? readFileSync(stamp, 'utf8') === lock : installedByHand()) return;
   say('Setting up: npm ci');
   run(npm, ['ci', '--no-audit', '--no-fund', '--loglevel', 'error']);
   writeFileSync(stamp, lock);
+}
+
+/** Whether npm itself was run after the lock file last changed. */
+function installedByHand() {
+  const note = join(root, 'node_modules/.package-lock.json');
+  return existsSync(note) && statSync(note).mtimeMs >= statSync(join(root, 'package-lock.json')).mtimeMs;
 }
 
 function build() {
@@ -48,13 +54,14 @@ function build() {
 
 function start() {
   fetchElectron();
-  const recipe = words.some((word) => !word.startsWith('-')) ? [] : [join(root, 'samples/demo.halosieve.json')];
-  process.exitCode = runFree(process.execPath, [join(root, 'out/main/halosieve.js'), 'open', ...recipe, ...words]);
+  // npm runs scripts in the package's folder; paths are meant from where the user stands.
+  const cwd = process.env.INIT_CWD ?? process.cwd();
+  process.exitCode = runFree(process.execPath, [join(root, 'out/main/halosieve.js'), 'open', ...words], cwd);
 }
 
 /** Tries once to fetch Electron's binary, where a window could be shown. */
 function fetchElectron() {
-  const display = process.platform !== 'linux' || process.env.DISPLAY || process.env.WAYLAND_DISPLAY;
+  const display = ['darwin', 'win32'].includes(process.platform) || process.env.DISPLAY || process.env.WAYLAND_DISPLAY;
   const tried = join(root, 'node_modules/.halosieve-electron');
   if (
     !display ||
@@ -67,7 +74,7 @@ function fetchElectron() {
   spawnSync(process.execPath, [join(root, 'node_modules/electron/install.js')], {
     cwd: root,
     stdio: 'ignore',
-    timeout: 90_000,
+    timeout: 60_000,
   });
   writeFileSync(tried, '');
 }
@@ -102,11 +109,11 @@ function run(command, args) {
   if (code !== 0) process.exit(code);
 }
 
-function runFree(command, args) {
+function runFree(command, args, cwd = root) {
   // A Ctrl-C reaches the child too; it decides how to end.
   process.on('SIGINT', () => undefined);
   const { status, error } = spawnSync(command, args, {
-    cwd: root,
+    cwd,
     stdio: 'inherit',
     shell: process.platform === 'win32' && command === npm,
   });

@@ -1,7 +1,7 @@
 import { type Problem, ProblemError } from '../../core/table/problem';
 import { problemText } from '../../core/table/wording';
 import type { Packet } from './link';
-import type { EventName, Events, RequestName, Requests } from './messages';
+import type { EventName, Events, RequestName, Requests, WordedProblem } from './messages';
 
 /** The engine as a door sees it. */
 export interface Served {
@@ -32,46 +32,56 @@ const NAMES: Readonly<Record<RequestName, true>> = {
 
 /** One window's side of an engine: takes its packets, sends it answers and events. */
 export interface WindowSeat {
-  take(packet: Packet): void;
+  /** Takes whatever came from the window; false when it was no question. Never throws. */
+  take(packet: unknown): boolean;
   leave(): void;
 }
 
 /** Seats a window at an engine; `bug` hears of failures that are not the input's fault. */
 export function seatWindow(engine: Served, send: (packet: Packet) => void, bug: (error: unknown) => void): WindowSeat {
-  const leave = engine.listen((name, data) => send({ type: 'event', name, data }));
+  const say = (packet: Packet): void => {
+    try {
+      send(packet);
+    } catch (error) {
+      bug(error);
+    }
+  };
+  const refuse = (id: number, problems: readonly WordedProblem[]): void => say({ type: 'refusal', id, problems });
+  const leave = engine.listen((name, data) => say({ type: 'event', name, data }));
   return {
     take(packet) {
-      if (packet.type !== 'ask') return;
+      if (!isQuestion(packet)) return false;
       const { id, name, params } = packet;
-      if (!Object.hasOwn(NAMES, name)) {
-        send({
-          type: 'refusal',
-          id,
-          problems: worded([{ code: 'unknown-option', severity: 'error', found: `the request ${name}` }]),
-        });
-        return;
+      if (!Object.hasOwn(NAMES, name) || typeof params !== 'object' || params === null) {
+        refuse(id, worded([{ code: 'unknown-option', severity: 'error', found: `the request ${name}` }]));
+        return true;
       }
       engine.handle(name, params as never).then(
-        (result) => send({ type: 'answer', id, result }),
+        (result) => say({ type: 'answer', id, result }),
         (error: unknown) => {
           if (!(error instanceof ProblemError)) bug(error);
-          send({
-            type: 'refusal',
-            id,
-            problems: error instanceof ProblemError ? worded(error.problems) : [internal(error)],
-          });
+          refuse(id, error instanceof ProblemError ? worded(error.problems) : [internal(error)]);
         },
       );
+      return true;
     },
     leave,
   };
 }
 
-function worded(problems: readonly Problem[]): (Problem & { text: string })[] {
+type Question = Extract<Packet, { type: 'ask' }>;
+
+function isQuestion(packet: unknown): packet is Question {
+  if (typeof packet !== 'object' || packet === null) return false;
+  const { type, id, name } = packet as Partial<Question>;
+  return type === 'ask' && Number.isSafeInteger(id) && typeof name === 'string';
+}
+
+function worded(problems: readonly Problem[]): WordedProblem[] {
   return problems.map((problem) => ({ ...problem, text: problemText(problem) }));
 }
 
-function internal(error: unknown): Problem & { text: string } {
+function internal(error: unknown): WordedProblem {
   const first = (error instanceof Error ? error.message : String(error)).split('\n')[0]!;
   return {
     code: 'cancelled',

@@ -4,6 +4,7 @@ import { connectWindows } from './ipc';
 import { menuTemplate } from './menu';
 import { servePages } from './pages';
 import { denyPermissions, lockNavigation, WINDOW_ORIGIN, windowOptions } from './policy';
+import { quitThroughEngine } from './quit';
 
 /** The parts of Electron that the application uses; a test gives doubles. */
 export interface Parts {
@@ -13,63 +14,66 @@ export interface Parts {
   readonly protocol: Pick<Protocol, 'handle'>;
   readonly session: () => Pick<Session, 'setPermissionRequestHandler' | 'setPermissionCheckHandler'>;
   readonly createWindow: (options: ReturnType<typeof windowOptions>) => BrowserWindow;
+  /** Tells the user why a file could not be opened. */
+  readonly tell: (error: unknown) => void;
 }
 
 export interface Places {
   readonly windowFolder: string;
   readonly preload: string;
-  /** Recipe or catalogue to open. */
-  readonly recipe: string;
+  /** Absolute path of the recipe or catalogue that was asked for. */
+  readonly asked: string | undefined;
+  /** What is opened when nothing was asked for. */
+  readonly demo: string;
 }
 
 /**
- * Runs the application: one instance, one bench, one window; closing the window closes the engine and quits. A second
- * start, or a file opened from the desktop, goes to the window that is there.
+ * Runs the application: one instance, one bench, one window; quitting closes the engine first. A second start, or a
+ * file opened from the desktop, goes to the window that is there.
  */
 export async function runApplication(
-  { app, ipc, menu, protocol, session, createWindow }: Parts,
+  { app, ipc, menu, protocol, session, createWindow, tell }: Parts,
   engine: Engine,
   places: Places,
   bug: (error: unknown) => void,
 ): Promise<void> {
-  if (!app.requestSingleInstanceLock()) {
+  // The path travels as data of its own: Chromium reorders the words of a command line and adds some.
+  if (!app.requestSingleInstanceLock({ asked: places.asked })) {
     app.quit();
     return;
   }
   const shown: { window?: BrowserWindow } = {};
-  const openPath = (path: string): void => void engine.handle('bench.open', { path }).catch(bug);
-  app.on('second-instance', (_, words) => {
+  let asked = places.asked;
+  const openPath = (path: string): void => {
+    asked = path;
+    // Before there is a window, the start itself opens what was asked for last.
+    if (shown.window) void engine.handle('bench.open', { path }).catch(tell);
+  };
+  app.on('second-instance', (_event, _words, _folder, data) => {
     if (shown.window?.isMinimized() === true) shown.window.restore();
     shown.window?.focus();
-    const path = words.slice(1).find((word) => /\.(halosieve\.)?json$|\.[ct]sv$/i.test(word));
-    if (path !== undefined) openPath(path);
+    const { asked: path } = data as { asked?: unknown };
+    if (typeof path === 'string') openPath(path);
   });
   app.on('open-file', (event, path) => {
     event.preventDefault();
     openPath(path);
   });
-  app.on(
-    'window-all-closed',
-    () =>
-      void engine
-        .close()
-        .catch(bug)
-        .finally(() => app.quit()),
-  );
+  quitThroughEngine(app, engine, bug);
 
   await app.whenReady();
   denyPermissions(session());
   servePages(protocol, places.windowFolder);
   menu.setApplicationMenu(menu.buildFromTemplate(menuTemplate(process.platform)));
-  await engine.handle('bench.open', { path: places.recipe }).catch(async (error: unknown) => {
-    bug(error);
-    await engine.handle('bench.new', {});
-  });
   const seat = connectWindows(ipc, engine, bug);
   const window = createWindow(windowOptions(places.preload));
   shown.window = window;
   lockNavigation(window.webContents);
-  seat(window.webContents);
   window.once('ready-to-show', () => window.show());
+  await engine.handle('bench.open', { path: asked ?? places.demo }).catch(async (error: unknown) => {
+    tell(error);
+    await engine.handle('bench.new', {});
+  });
+  seat(window.webContents);
   await window.loadURL(`${WINDOW_ORIGIN}/index.html`);
 }

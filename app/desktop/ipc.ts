@@ -11,7 +11,7 @@ export function connectWindows(
   bug: (error: unknown) => void,
 ): (contents: WebContents) => void {
   const seats = new Map<number, WindowSeat>();
-  ipc.on(TO_ENGINE, (event, packet: Packet) => {
+  ipc.on(TO_ENGINE, (event, packet: unknown) => {
     const { senderFrame } = event;
     if (!senderFrame || senderFrame.parent !== null || !isWindowAddress(senderFrame.url)) return;
     seats.get(event.sender.id)?.take(packet);

@@ -32,6 +32,9 @@ export function lockNavigation(contents: Pick<WebContents, 'on' | 'setWindowOpen
   contents.on('will-navigate', (event) => {
     if (!isWindowAddress(event.url)) event.preventDefault();
   });
+  contents.on('will-frame-navigate', (event) => {
+    if (!event.isMainFrame) event.preventDefault();
+  });
   contents.on('will-redirect', refuse);
   contents.on('will-attach-webview', refuse);
 }

@@ -13,13 +13,9 @@ it.skipIf(electron === undefined || !hasDisplay())(
   'the real application starts and stays (skipped without binary or display)',
   async () => {
     const state = mkdtempSync(join(tmpdir(), 'halosieve-electron-'));
-    const child = spawn(
-      electron!,
-      [join(ROOT, 'out/main/desktop.js'), join(ROOT, 'samples/demo.halosieve.json'), '--no-sandbox'],
-      {
-        env: { ...process.env, XDG_STATE_HOME: state },
-      },
-    );
+    const child = spawn(electron!, [ROOT, join(ROOT, 'samples/demo.halosieve.json'), '--no-sandbox'], {
+      env: { ...process.env, XDG_STATE_HOME: state },
+    });
     await new Promise((later) => setTimeout(later, 8000));
     expect(child.exitCode).toBeNull();
     const gone = once(child, 'exit');
