@@ -1,6 +1,6 @@
 import { KM_S_PER_MAS_YR_KPC } from './constants';
 import { type Galactocentric, galactocentric } from './galactocentric';
-import { skyBasis } from './skybasis';
+import { bySkyBlocks, skyBasis, type SkyBlock } from './skybasis';
 import type { SolarFrame } from './solarframes';
 
 /** Observed columns: ICRS degrees, kpc, mas/yr (μ_α cos δ), km/s. NaN is missing. */
@@ -40,25 +40,32 @@ export function phaseOf(observed: Observed, frame: SolarFrame): Phase {
     vZ: column(),
     lsrSpeedKmS: frame.lsrSpeedKmS,
   };
-  fill(observed, galactocentric(frame), phase);
+  const [there, basis] = [galactocentric(frame), new Float64Array(9)];
+  bySkyBlocks(observed.ra, observed.dec, (sky, from, to) => fill(observed, there, phase, sky, from, to, basis));
   return phase;
 }
 
-function fill(observed: Observed, to: Galactocentric, phase: Phase): void {
-  const { ra, dec, distance, pmRa, pmDec, vLos } = observed;
+function fill(
+  { distance, pmRa, pmDec, vLos }: Observed,
+  { rotation, offset, sun }: Galactocentric,
+  phase: Phase,
+  sky: SkyBlock,
+  from: number,
+  to: number,
+  basis: Float64Array,
+): void {
   const moving = pmRa !== undefined && pmDec !== undefined && vLos !== undefined;
-  const basis = new Float64Array(9);
-  for (let row = 0; row < phase.rows; row++) {
-    skyBasis(to.rotation, ra[row]!, dec[row]!, basis);
+  for (let row = from; row < to; row++) {
+    skyBasis(rotation, sky, row - from, basis);
     const d = distance[row]!;
-    phase.x[row] = d * basis[0]! + to.offset[0];
-    phase.y[row] = d * basis[1]! + to.offset[1];
-    phase.z[row] = d * basis[2]! + to.offset[2];
+    phase.x[row] = d * basis[0]! + offset[0];
+    phase.y[row] = d * basis[1]! + offset[1];
+    phase.z[row] = d * basis[2]! + offset[2];
     const east = moving ? KM_S_PER_MAS_YR_KPC * d * pmRa[row]! : Number.NaN;
     const north = moving ? KM_S_PER_MAS_YR_KPC * d * pmDec[row]! : Number.NaN;
     const out = moving ? vLos[row]! : Number.NaN;
-    phase.vX[row] = out * basis[0]! + east * basis[3]! + north * basis[6]! + to.sun[0];
-    phase.vY[row] = out * basis[1]! + east * basis[4]! + north * basis[7]! + to.sun[1];
-    phase.vZ[row] = out * basis[2]! + east * basis[5]! + north * basis[8]! + to.sun[2];
+    phase.vX[row] = out * basis[0]! + east * basis[3]! + north * basis[6]! + sun[0];
+    phase.vY[row] = out * basis[1]! + east * basis[4]! + north * basis[7]! + sun[1];
+    phase.vZ[row] = out * basis[2]! + east * basis[5]! + north * basis[8]! + sun[2];
   }
 }

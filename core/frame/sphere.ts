@@ -15,7 +15,8 @@ export function direction([x, y, z]: Vector): [number, number] {
 
 /** An angle in degrees turned into [0, 360). */
 export function wrapDeg(angle: number): number {
-  const turned = angle % 360;
+  // The remainder is slow, and few angles need it.
+  const turned = angle >= 360 || angle <= -360 ? angle % 360 : angle;
   const positive = turned < 0 ? turned + 360 : turned;
   return positive === 360 ? 0 : positive;
 }

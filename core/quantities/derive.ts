@@ -7,10 +7,13 @@ import type { MeasuredId } from '../table/role';
 import { heliocentricDistance } from './distance';
 import { type ExtinctionLaw, extinctionV, recalibratedExcess } from './extinction';
 import { galacticColumns } from './galactic';
-import type { Kernel } from './kernel';
+import type { GalactocentricState, Kernel } from './kernel';
+import { momentaOf } from './momenta';
 import { MOMENTUM_KERNELS } from './momentum';
+import { motionsOf } from './motions';
+import { placesOf } from './places';
 import { POSITION_KERNELS } from './position';
-import { sigmasOf, valuesOf } from './propagate';
+import { sigmasOf } from './propagate';
 import type { QuantityColumn, QuantityDefinition, QuantitySet } from './quantity';
 import { DERIVED, MEASURED_QUANTITIES } from './registry';
 import { VELOCITY_KERNELS } from './velocity';
@@ -72,10 +75,11 @@ export function deriveQuantities(measured: MeasuredTable, options: DeriveOptions
 }
 
 function fromKernel(kernel: Kernel, state: State): QuantityColumn | undefined {
-  const phase = state.phase();
-  if (!phase) return undefined;
+  const there = state.galactocentric();
+  if (!there) return undefined;
   const covariance = state.covariance();
-  return { values: valuesOf(kernel, phase), sigma: covariance && sigmasOf(kernel, phase, covariance) };
+  const values = kernel.values(there);
+  return { values, sigma: covariance && sigmasOf(kernel.gradient(there), kernel.moving, covariance) };
 }
 
 function carried(column: NumberColumn): QuantityDefinition {
@@ -102,8 +106,8 @@ function available(id: string, { columns }: MeasuredTable): boolean {
 
 interface State {
   distance(): QuantityColumn | undefined;
-  galactic(): ReturnType<typeof galacticColumns>;
-  phase(): Phase | undefined;
+  galactic(): ReturnType<typeof galacticColumns> | undefined;
+  galactocentric(): GalactocentricState | undefined;
   covariance(): Float64Array | undefined;
 }
 
@@ -114,14 +118,24 @@ function lazyState(measured: MeasuredTable, frame: SolarFrame): State {
   const observed = once((): Observed | undefined => {
     const [ra, dec, far] = [values('ra'), values('dec'), distance()];
     if (!ra || !dec || !far) return undefined;
-    return { ra, dec, distance: far.values, pmRa: values('pm_ra'), pmDec: values('pm_dec'), vLos: values('v_los') };
+    return {
+      ra,
+      dec,
+      distance: far.values,
+      pmRa: values('pm_ra'),
+      pmDec: values('pm_dec'),
+      vLos: values('v_los'),
+    };
   });
   return {
     distance,
-    galactic: once(() => galacticColumns(measured)),
-    phase: once(() => {
+    galactic: once(() => {
+      const [ra, dec] = [measured.columns.get('ra'), measured.columns.get('dec')];
+      return ra && dec && galacticColumns(ra, dec);
+    }),
+    galactocentric: once(() => {
       const seen = observed();
-      return seen && phaseOf(seen, frame);
+      return seen && stateOf(phaseOf(seen, frame));
     }),
     covariance: once(() => {
       const [seen, far] = [observed(), distance()?.sigma];
@@ -138,6 +152,12 @@ function lazyState(measured: MeasuredTable, frame: SolarFrame): State {
       return phaseCovariance(seen, errors, frame);
     }),
   };
+}
+
+function stateOf(phase: Phase): GalactocentricState {
+  const places = once(() => placesOf(phase));
+  const momenta = once(() => momentaOf(phase));
+  return { phase, places, momenta, motions: once(() => motionsOf(phase, places(), momenta())) };
 }
 
 function once<T>(make: () => T): () => T {

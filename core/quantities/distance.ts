@@ -14,8 +14,7 @@ export function heliocentricDistance(table: MeasuredTable): QuantityColumn | und
     table.columns.get(id),
   );
   if (!modulus && !direct && !parallax) return undefined;
-  const values = new Float64Array(table.rows).fill(Number.NaN);
-  const sigma = new Float64Array(table.rows).fill(Number.NaN);
+  const [values, sigma] = [new Float64Array(table.rows), new Float64Array(table.rows)];
   for (let row = 0; row < table.rows; row++) {
     const mu = modulus?.values[row] ?? Number.NaN;
     const d = direct?.values[row] ?? Number.NaN;
@@ -30,6 +29,8 @@ export function heliocentricDistance(table: MeasuredTable): QuantityColumn | und
     } else if (givesDistance(plx, plxSigma)) {
       values[row] = 1 / plx;
       sigma[row] = plxSigma / (plx * plx);
+    } else {
+      values[row] = sigma[row] = Number.NaN;
     }
   }
   return { values, sigma };

@@ -1,14 +1,25 @@
 import type { Phase } from '../frame/phase';
+import type { Momenta } from './momenta';
+import type { Motions } from './motions';
+import type { Places } from './places';
 
-/** One quantity of the Galactocentric state: its value, and its gradient by (x, y, z, v_x, v_y, v_z). */
+/** The Galactocentric state of all rows; each family of columns is computed when first asked for. */
+export interface GalactocentricState {
+  readonly phase: Phase;
+  places(): Places;
+  motions(): Motions;
+  momenta(): Momenta;
+}
+
+/** Writes the derivatives of a quantity of one row by (x, y, z, v_x, v_y, v_z). */
+export type Gradient = (row: number, to: Float64Array) => void;
+
+/** One quantity of the Galactocentric state. */
 export interface Kernel {
   /** Whether the value hangs on the velocity. */
   readonly moving: boolean;
-  value(phase: Phase, row: number): number;
-  /** The whole column, where the state already holds it. */
-  column?(phase: Phase): Float64Array;
-  /** Writes the six derivatives. */
-  gradient(phase: Phase, row: number, to: Float64Array): void;
+  values(state: GalactocentricState): Float64Array;
+  gradient(state: GalactocentricState): Gradient;
 }
 
 /** Writes six derivatives. */

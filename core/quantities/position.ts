@@ -1,26 +1,12 @@
-import type { Phase } from '../frame/phase';
-import { type Kernel, put } from './kernel';
+import { type Gradient, type Kernel, put } from './kernel';
 
-/** Cylindrical radius. */
-export function cylRadius(p: Phase, i: number): number {
-  return Math.sqrt(p.x[i]! * p.x[i]! + p.y[i]! * p.y[i]!);
-}
-
-/** Spherical radius. */
-export function radius(p: Phase, i: number): number {
-  return Math.sqrt(p.x[i]! * p.x[i]! + p.y[i]! * p.y[i]! + p.z[i]! * p.z[i]!);
-}
-
+/** A Cartesian component of the state, already there. */
 function component(id: 'x' | 'y' | 'z' | 'vX' | 'vY' | 'vZ', axis: number): Kernel {
-  return {
-    moving: axis > 2,
-    value: (p, i) => p[id][i]!,
-    column: (p) => p[id],
-    gradient(_, __, to) {
-      to.fill(0);
-      to[axis] = 1;
-    },
+  const gradient: Gradient = (_, to) => {
+    to.fill(0);
+    to[axis] = 1;
   };
+  return { moving: axis > 2, values: ({ phase }) => phase[id], gradient: () => gradient };
 }
 
 export const POSITION_KERNELS = {
@@ -32,18 +18,20 @@ export const POSITION_KERNELS = {
   v_z: component('vZ', 5),
   cyl_r: {
     moving: false,
-    value: cylRadius,
-    gradient(p, i, to) {
-      const R = cylRadius(p, i);
-      put(to, p.x[i]! / R, p.y[i]! / R, 0, 0, 0, 0);
+    values: (state) => state.places().cylR,
+    gradient(state) {
+      const { x, y } = state.phase;
+      const { cylR } = state.places();
+      return (i, to) => put(to, x[i]! / cylR[i]!, y[i]! / cylR[i]!, 0, 0, 0, 0);
     },
   },
   r: {
     moving: false,
-    value: radius,
-    gradient(p, i, to) {
-      const r = radius(p, i);
-      put(to, p.x[i]! / r, p.y[i]! / r, p.z[i]! / r, 0, 0, 0);
+    values: (state) => state.places().r,
+    gradient(state) {
+      const { x, y, z } = state.phase;
+      const { r } = state.places();
+      return (i, to) => put(to, x[i]! / r[i]!, y[i]! / r[i]!, z[i]! / r[i]!, 0, 0, 0);
     },
   },
 } as const satisfies Record<string, Kernel>;

@@ -1,32 +1,37 @@
 import { TRIANGLE } from '../frame/covariance';
-import type { Phase } from '../frame/phase';
-import type { Kernel } from './kernel';
+import type { Gradient } from './kernel';
 
-/** Values of a quantity, one per row. */
-export function valuesOf(kernel: Kernel, phase: Phase): Float64Array {
-  const there = kernel.column?.(phase);
-  if (there) return there;
-  const values = new Float64Array(phase.rows);
-  for (let row = 0; row < phase.rows; row++) values[row] = kernel.value(phase, row);
-  return values;
-}
-
-/** Linear 1σ errors √(gᵀ C g) from the packed covariance; NaN where an input error that matters is missing. */
-export function sigmasOf(kernel: Kernel, phase: Phase, covariance: Float64Array): Float64Array {
-  const sigmas = new Float64Array(phase.rows);
+/**
+ * Linear 1σ errors √(gᵀ C g) of every row from the packed covariance; NaN where an input error that matters is missing.
+ * @param moving whether the quantity hangs on the velocity; one of the position alone must not see velocity errors,
+ *   which may be missing
+ */
+export function sigmasOf(gradient: Gradient, moving: boolean, covariance: Float64Array): Float64Array {
+  const sigmas = new Float64Array(covariance.length / TRIANGLE);
   const g = new Float64Array(6);
-  // A quantity of the position alone must not see velocity errors, which may be missing.
-  const size = kernel.moving ? 6 : 3;
-  for (let row = 0; row < phase.rows; row++) {
-    kernel.gradient(phase, row, g);
-    const at = TRIANGLE * row;
-    let sum = 0;
-    for (let i = 0; i < size; i++) {
-      // Row i of the packed triangle starts at i(13 − i)/2 with its diagonal.
-      const start = at + (i * (13 - i)) / 2 - i;
-      const gi = g[i]!;
-      sum += gi * gi * covariance[start + i]!;
-      for (let j = i + 1; j < size; j++) sum += 2 * gi * g[j]! * covariance[start + j]!;
+  const c = covariance;
+  for (let row = 0, at = 0; row < sigmas.length; row++, at += TRIANGLE) {
+    gradient(row, g);
+    const x = g[0]!;
+    const y = g[1]!;
+    const z = g[2]!;
+    // Written out: loops over a triangle cost five times as much.
+    let sum =
+      x * (x * c[at]! + 2 * (y * c[at + 1]! + z * c[at + 2]!)) +
+      y * (y * c[at + 6]! + 2 * z * c[at + 7]!) +
+      z * z * c[at + 11]!;
+    if (moving) {
+      const u = g[3]!;
+      const v = g[4]!;
+      const w = g[5]!;
+      sum +=
+        2 *
+          (x * (u * c[at + 3]! + v * c[at + 4]! + w * c[at + 5]!) +
+            y * (u * c[at + 8]! + v * c[at + 9]! + w * c[at + 10]!) +
+            z * (u * c[at + 12]! + v * c[at + 13]! + w * c[at + 14]!)) +
+        u * (u * c[at + 15]! + 2 * (v * c[at + 16]! + w * c[at + 17]!)) +
+        v * (v * c[at + 18]! + 2 * w * c[at + 19]!) +
+        w * w * c[at + 20]!;
     }
     sigmas[row] = Math.sqrt(sum < 0 ? 0 : sum);
   }

@@ -1,134 +1,93 @@
-import type { Phase } from '../frame/phase';
-import { type Kernel, put } from './kernel';
-import { cylRadius, radius } from './position';
+import { type GalactocentricState, type Gradient, type Kernel, put } from './kernel';
+import type { Motions } from './motions';
 
-function vCylR(p: Phase, i: number): number {
-  return (p.x[i]! * p.vX[i]! + p.y[i]! * p.vY[i]!) / cylRadius(p, i);
+/** A quantity of the motions with its gradient. */
+function kernel(id: keyof Motions, gradient: (state: GalactocentricState) => Gradient): Kernel {
+  return { moving: true, values: (state) => state.motions()[id], gradient };
 }
 
-function vPhi(p: Phase, i: number): number {
-  return (p.y[i]! * p.vX[i]! - p.x[i]! * p.vY[i]!) / cylRadius(p, i);
+function alongCylR(state: GalactocentricState): Gradient {
+  const { x, y, vX, vY } = state.phase;
+  const [{ cylR }, { vCylR }] = [state.places(), state.motions()];
+  return (i, to) => {
+    const R = cylR[i]!;
+    const [cos, sin, v] = [x[i]! / R, y[i]! / R, vCylR[i]!];
+    put(to, (vX[i]! - v * cos) / R, (vY[i]! - v * sin) / R, 0, cos, sin, 0);
+  };
 }
 
-function vRadial(p: Phase, i: number): number {
-  return (p.x[i]! * p.vX[i]! + p.y[i]! * p.vY[i]! + p.z[i]! * p.vZ[i]!) / radius(p, i);
+function alongPhi(state: GalactocentricState): Gradient {
+  const { x, y, vX, vY } = state.phase;
+  const [{ cylR }, { vPhi }] = [state.places(), state.motions()];
+  return (i, to) => {
+    const R = cylR[i]!;
+    const [cos, sin, v] = [x[i]! / R, y[i]! / R, vPhi[i]!];
+    put(to, (-vY[i]! - v * cos) / R, (vX[i]! - v * sin) / R, 0, sin, -cos, 0);
+  };
 }
 
-function vTheta(p: Phase, i: number): number {
-  return (p.z[i]! * vCylR(p, i) - cylRadius(p, i) * p.vZ[i]!) / radius(p, i);
+function alongR(state: GalactocentricState): Gradient {
+  const { x, y, z, vX, vY, vZ } = state.phase;
+  const [{ r: radius }, { vR }] = [state.places(), state.motions()];
+  return (i, to) => {
+    const r = radius[i]!;
+    const [ux, uy, uz, v] = [x[i]! / r, y[i]! / r, z[i]! / r, vR[i]!];
+    put(to, (vX[i]! - v * ux) / r, (vY[i]! - v * uy) / r, (vZ[i]! - v * uz) / r, ux, uy, uz);
+  };
 }
 
-function vTangential(p: Phase, i: number): number {
-  const theta = vTheta(p, i);
-  const phi = vPhi(p, i);
-  return Math.sqrt(theta * theta + phi * phi);
+function alongTheta(state: GalactocentricState): Gradient {
+  const { x, y, z, vX, vY, vZ } = state.phase;
+  const [{ cylR, r: radius }, { vCylR, vTheta }] = [state.places(), state.motions()];
+  return (i, to) => {
+    const [R, r, out] = [cylR[i]!, radius[i]!, vCylR[i]!];
+    const [cos, sin, up] = [x[i]! / R, y[i]! / R, vZ[i]!];
+    const byX = (z[i]! * (vX[i]! - out * cos)) / R - cos * up;
+    const byY = (z[i]! * (vY[i]! - out * sin)) / R - sin * up;
+    const perR = vTheta[i]! / r;
+    const [toX, toY, toZ] = [(byX - perR * x[i]!) / r, (byY - perR * y[i]!) / r, (out - perR * z[i]!) / r];
+    put(to, toX, toY, toZ, (z[i]! * cos) / r, (z[i]! * sin) / r, -R / r);
+  };
 }
 
-function speed(p: Phase, i: number): number {
-  return Math.sqrt(p.vX[i]! * p.vX[i]! + p.vY[i]! * p.vY[i]! + p.vZ[i]! * p.vZ[i]!);
+/** v_t² = v² − v_r². */
+function tangential(state: GalactocentricState): Gradient {
+  const { vX, vY, vZ } = state.phase;
+  const { vR, vT } = state.motions();
+  const radial = alongR(state);
+  return (i, to) => {
+    radial(i, to);
+    const [v, share] = [vT[i]!, vR[i]! / vT[i]!];
+    const [toX, toY, toZ] = [-share * to[0]!, -share * to[1]!, -share * to[2]!];
+    put(to, toX, toY, toZ, vX[i]! / v - share * to[3]!, vY[i]! / v - share * to[4]!, vZ[i]! / v - share * to[5]!);
+  };
 }
 
-function toomreSpeed(p: Phase, i: number): number {
-  const out = vCylR(p, i);
-  const turn = vPhi(p, i) - p.lsrSpeedKmS;
-  const up = p.vZ[i]!;
-  return Math.sqrt(out * out + turn * turn + up * up);
+function total(state: GalactocentricState): Gradient {
+  const { vX, vY, vZ } = state.phase;
+  const { speed } = state.motions();
+  return (i, to) => put(to, 0, 0, 0, vX[i]! / speed[i]!, vY[i]! / speed[i]!, vZ[i]! / speed[i]!);
 }
 
-const vCylRKernel: Kernel = {
-  moving: true,
-  value: vCylR,
-  gradient(p, i, to) {
-    const R = cylRadius(p, i);
-    const [cos, sin, v] = [p.x[i]! / R, p.y[i]! / R, vCylR(p, i)];
-    put(to, (p.vX[i]! - v * cos) / R, (p.vY[i]! - v * sin) / R, 0, cos, sin, 0);
-  },
-};
-
-const vPhiKernel: Kernel = {
-  moving: true,
-  value: vPhi,
-  gradient(p, i, to) {
-    const R = cylRadius(p, i);
-    const [cos, sin, v] = [p.x[i]! / R, p.y[i]! / R, vPhi(p, i)];
-    put(to, (-p.vY[i]! - v * cos) / R, (p.vX[i]! - v * sin) / R, 0, sin, -cos, 0);
-  },
-};
-
-const vRadialKernel: Kernel = {
-  moving: true,
-  value: vRadial,
-  gradient(p, i, to) {
-    const r = radius(p, i);
-    const [ux, uy, uz, v] = [p.x[i]! / r, p.y[i]! / r, p.z[i]! / r, vRadial(p, i)];
-    put(to, (p.vX[i]! - v * ux) / r, (p.vY[i]! - v * uy) / r, (p.vZ[i]! - v * uz) / r, ux, uy, uz);
-  },
-};
-
-const vThetaKernel: Kernel = {
-  moving: true,
-  value: vTheta,
-  gradient(p, i, to) {
-    const [R, r, out, v] = [cylRadius(p, i), radius(p, i), vCylR(p, i), vTheta(p, i)];
-    const [cos, sin, z, up] = [p.x[i]! / R, p.y[i]! / R, p.z[i]!, p.vZ[i]!];
-    const byX = (z * (p.vX[i]! - out * cos)) / R - cos * up;
-    const byY = (z * (p.vY[i]! - out * sin)) / R - sin * up;
-    const perR = v / r;
-    put(
-      to,
-      (byX - perR * p.x[i]!) / r,
-      (byY - perR * p.y[i]!) / r,
-      (out - perR * z) / r,
-      (z * cos) / r,
-      (z * sin) / r,
-      -R / r,
-    );
-  },
-};
-
-const vTangentialKernel: Kernel = {
-  moving: true,
-  value: vTangential,
-  gradient(p, i, to) {
-    // v_t² = v² − v_r².
-    vRadialKernel.gradient(p, i, to);
-    const [radial, v] = [vRadial(p, i), vTangential(p, i)];
-    for (let axis = 0; axis < 6; axis++) to[axis] = (-radial * to[axis]!) / v;
-    to[3]! += p.vX[i]! / v;
-    to[4]! += p.vY[i]! / v;
-    to[5]! += p.vZ[i]! / v;
-  },
-};
-
-const speedKernel: Kernel = {
-  moving: true,
-  value: speed,
-  gradient(p, i, to) {
-    const v = speed(p, i);
-    put(to, 0, 0, 0, p.vX[i]! / v, p.vY[i]! / v, p.vZ[i]! / v);
-  },
-};
-
-const toomreKernel: Kernel = {
-  moving: true,
-  value: toomreSpeed,
-  gradient(p, i, to) {
-    // T² = v² − 2 V v_φ + V².
-    vPhiKernel.gradient(p, i, to);
-    const v = toomreSpeed(p, i);
-    for (let axis = 0; axis < 6; axis++) to[axis] = (-p.lsrSpeedKmS * to[axis]!) / v;
-    to[3]! += p.vX[i]! / v;
-    to[4]! += p.vY[i]! / v;
-    to[5]! += p.vZ[i]! / v;
-  },
-};
+/** T² = v² − 2 V v_φ + V². */
+function toomre(state: GalactocentricState): Gradient {
+  const { vX, vY, vZ, lsrSpeedKmS } = state.phase;
+  const { toomreSpeed } = state.motions();
+  const turning = alongPhi(state);
+  return (i, to) => {
+    turning(i, to);
+    const [v, share] = [toomreSpeed[i]!, lsrSpeedKmS / toomreSpeed[i]!];
+    const [toX, toY, toZ] = [-share * to[0]!, -share * to[1]!, -share * to[2]!];
+    put(to, toX, toY, toZ, vX[i]! / v - share * to[3]!, vY[i]! / v - share * to[4]!, vZ[i]! / v - share * to[5]!);
+  };
+}
 
 export const VELOCITY_KERNELS = {
-  v_cyl_r: vCylRKernel,
-  v_phi: vPhiKernel,
-  v_r: vRadialKernel,
-  v_theta: vThetaKernel,
-  v_t: vTangentialKernel,
-  speed: speedKernel,
-  toomre_speed: toomreKernel,
+  v_cyl_r: kernel('vCylR', alongCylR),
+  v_phi: kernel('vPhi', alongPhi),
+  v_r: kernel('vR', alongR),
+  v_theta: kernel('vTheta', alongTheta),
+  v_t: kernel('vT', tangential),
+  speed: kernel('speed', total),
+  toomre_speed: kernel('toomreSpeed', toomre),
 } as const satisfies Record<string, Kernel>;
