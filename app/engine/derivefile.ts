@@ -1,22 +1,20 @@
-import { createReadStream, createWriteStream } from 'node:fs';
-import { rename, rm, stat } from 'node:fs/promises';
-import { once } from 'node:events';
-import { basename, dirname, join } from 'node:path';
-import { randomBytes } from 'node:crypto';
-import { cellTexts, eachRecord } from '../../core/formats/csv/records';
-import { csvRow } from '../../core/formats/csv/write';
+import { createReadStream } from 'node:fs';
+import { stat } from 'node:fs/promises';
+import { basename } from 'node:path';
+import { eachRecord } from '../../core/formats/csv/records';
+import { RowBytes } from '../../core/formats/csv/rowbytes';
+import { textOf } from '../../core/formats/csv/cells';
+import type { RawRecord } from '../../core/formats/csv/scanner';
 import type { SolarFrame } from '../../core/frame/solarframes';
-import { deriveQuantities } from '../../core/quantities/derive';
-import type { QuantityColumn, QuantitySet } from '../../core/quantities/quantity';
-import { DERIVED } from '../../core/quantities/registry';
 import type { ColumnMeaning } from '../../core/roster/sourcemap';
 import { understandSource } from '../../core/roster/understand';
-import { numberText } from '../../core/table/column';
 import { fail, type Problem } from '../../core/table/problem';
 import type { Progress } from '../contract/messages';
 import { guessedMeanings } from './columnview';
-import { fileProblem, withFile } from './files';
+import { DERIVED_NAMES, derivedRows } from './derivedrows';
+import { withFile } from './files';
 import { readSourceFile } from './sourcefile';
+import { wholeFile } from './wholefile';
 
 export interface DeriveFileOptions {
   readonly frame: SolarFrame;
@@ -39,8 +37,8 @@ export interface DeriveSummary {
   readonly problems: readonly Problem[];
 }
 
-/** Cells written at once. */
-const BLOCK = 1 << 20;
+/** Bytes read at once. */
+const CHUNK = 1 << 20;
 
 /**
  * Writes a table's own cells, as they stand, and behind them every derived quantity with its error: one row per input
@@ -60,44 +58,39 @@ export async function deriveFile(inPath: string, outPath: string, options: Deriv
   const { file } = await readSourceFile(inPath, { fileName, ...named, onBytes: progress(`Reading ${fileName}`) });
   const meanings = options.meanings ?? guessedMeanings(file.table);
   const source = understandSource('file', file, meanings);
-  const quantities = deriveQuantities(source.measured, options);
-  const cells = derivedCells(quantities);
-  const taken = new Set(DERIVED.flatMap(({ id }) => [id, `${id}_error`]));
+  const writeDerived = derivedRows(source.measured, options);
   const renamed: { from: string; to: string }[] = [];
 
-  const out = await temporaryWriter(outPath);
+  const out = await wholeFile(outPath);
+  const text = new RowBytes(2 * CHUNK);
   let [rows, placed] = [0, 0];
   try {
-    let block = '';
-    const chunks = createReadStream(inPath, { highWaterMark: BLOCK });
-    const onBytes = progress(`Writing ${basename(outPath)}`);
     const sink = {
       heading({ header }: { header: readonly string[] }): void {
-        const names = header.map((name, at) => freeName(name === '' ? `column_${at + 1}` : name, taken, renamed));
-        block += csvRow([...names, ...taken]);
+        header.forEach((name, at) => text.text(freeName(name === '' ? `column_${at + 1}` : name, renamed)));
+        DERIVED_NAMES.forEach((name) => text.text(name));
+        text.endRow();
       },
-      record(record: Parameters<typeof cellTexts>[0]): void {
+      record(record: RawRecord): void {
         rows++;
-        const own = fitted(cellTexts(record), file.table.columns.length, file.delimiter);
+        writeOwn(record, file.table.columns.length, file.delimiter, text);
         const known = source.lines[placed] === record.line;
-        block += csvRow([...own, ...cells(known ? placed : -1)]);
+        writeDerived(known ? placed : -1, text);
+        text.endRow();
         if (known) placed++;
       },
     };
+    const chunks = createReadStream(inPath, { highWaterMark: CHUNK });
     await eachRecord(
-      flushing(chunks, () => {
-        const text = block;
-        block = '';
-        return out.write(text);
-      }),
-      { fileName, onBytes },
+      flushing(chunks, () => out.write(text.take())),
+      { fileName, onBytes: progress(`Writing ${basename(outPath)}`) },
       sink,
     );
-    await out.write(block);
+    await out.write(text.take());
     await out.finish();
   } catch (error) {
     await out.discard();
-    throw fileProblem(error, outPath, false);
+    throw error;
   }
   return { rows, rowsWithoutPosition: rows - placed, meanings, renamed, problems: source.problems };
 }
@@ -110,51 +103,20 @@ async function* flushing(chunks: AsyncIterable<Uint8Array>, flush: () => Promise
   }
 }
 
-function derivedCells(quantities: QuantitySet): (row: number) => string[] {
-  const columns = DERIVED.map(({ id }): QuantityColumn | undefined => quantities.column(id));
-  return (row) =>
-    columns.flatMap((column) =>
-      row < 0 || column === undefined
-        ? ['', '']
-        : [numberText(column.values[row]!), numberText(column.sigma?.[row] ?? Number.NaN)],
-    );
+/** Writes as many cells as the header has; surplus cells stay together in the last one. */
+function writeOwn(record: RawRecord, width: number, delimiter: string, to: RowBytes): void {
+  const alone = record.cells <= width ? record.cells : width - 1;
+  for (let cell = 0; cell < alone; cell++) to.raw(record, cell);
+  for (let cell = record.cells; cell < width; cell++) to.text('');
+  if (alone === record.cells) return;
+  const surplus = Array.from({ length: record.cells - alone }, (_, at) =>
+    textOf(record.bytes, record.starts[alone + at]!, record.ends[alone + at]!),
+  );
+  to.text(surplus.join(delimiter));
 }
 
-/** Gives a row as many cells as the header has; surplus cells stay together in the last one. */
-function fitted(cells: readonly string[], width: number, delimiter: string): string[] {
-  if (cells.length <= width) return [...cells, ...Array.from({ length: width - cells.length }, () => '')];
-  return [...cells.slice(0, width - 1), cells.slice(width - 1).join(delimiter)];
-}
-
-function freeName(name: string, taken: ReadonlySet<string>, renamed: { from: string; to: string }[]): string {
-  if (!taken.has(name)) return name;
+function freeName(name: string, renamed: { from: string; to: string }[]): string {
+  if (!DERIVED_NAMES.includes(name)) return name;
   renamed.push({ from: name, to: `${name}_input` });
   return `${name}_input`;
-}
-
-interface Writer {
-  write(text: string): Promise<void>;
-  finish(): Promise<void>;
-  discard(): Promise<void>;
-}
-
-/** A stream into a temporary sibling that takes the final name when it is finished. */
-async function temporaryWriter(path: string): Promise<Writer> {
-  const sibling = join(dirname(path), `.halosieve-${randomBytes(6).toString('hex')}-${basename(path)}`);
-  const stream = createWriteStream(sibling);
-  await withFile(path, false, () => once(stream, 'open').then(() => undefined));
-  return {
-    async write(text) {
-      if (text !== '' && !stream.write(text)) await once(stream, 'drain');
-    },
-    async finish() {
-      stream.end();
-      await once(stream, 'finish');
-      await rename(sibling, path);
-    },
-    async discard() {
-      stream.destroy();
-      await rm(sibling, { force: true });
-    },
-  };
 }

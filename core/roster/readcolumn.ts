@@ -8,19 +8,22 @@ import type { Assigned } from './meaning';
 export function canonicalValues(assigned: Assigned, rows: number): Float64Array {
   const { column, factor } = assigned;
   if (column.type === 'number') {
-    const convert = conversion(factor!);
-    return Float64Array.from(column.values.subarray(0, rows), convert);
+    const values = column.values.slice(0, rows);
+    convert(values, factor!);
+    return values;
   }
   const degrees = column.dictionary.map((text) => degreesFromSexagesimal(text, assigned.hours));
-  return Float64Array.from(column.codes, (code) => (code < 0 ? Number.NaN : degrees[code]!));
+  const values = new Float64Array(rows);
+  for (let row = 0; row < rows; row++) values[row] = degrees[column.codes[row]!] ?? Number.NaN;
+  return values;
 }
 
 /** Multiplies by a factor; divides where its inverse is a whole number, so that 11540 pc are 11.54 kpc to the last bit. */
-function conversion(factor: number): (value: number) => number {
-  if (factor === 1) return (value) => value;
+function convert(values: Float64Array, factor: number): void {
+  if (factor === 1) return;
   const divisor = Math.round(1 / factor);
   const whole = divisor > 1 && Math.abs(1 / factor - divisor) < 1e-9 * divisor;
-  return whole ? (value) => value / divisor : (value) => value * factor;
+  for (let row = 0; row < values.length; row++) values[row] = whole ? values[row]! / divisor : values[row]! * factor;
 }
 
 /** Values outside what can be become missing; one problem stands for all, with the first lines. */

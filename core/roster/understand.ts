@@ -29,15 +29,13 @@ export function understandSource(id: string, file: DelimitedFile, meanings: read
   problems.push(...cautions(columns, assigned, where));
 
   const kept = placedRows(columns, file.table.rows);
-  const pick = (values: Float64Array): Float64Array => Float64Array.from(kept, (row) => values[row]!);
-  const name = assigned.get('name');
-  const names = Array.from(kept, (row) => (name === undefined ? '' : cellText(name.column, row)));
+  const pick = picker(kept, file.table.rows);
   return {
     id,
-    names,
+    names: namesOf(assigned.get('name'), kept),
     measured: { rows: kept.length, columns: mapColumns(columns, pick) },
     extras: extras.map(({ column }) => extraColumn(id, column as NumberColumn, pick)),
-    lines: Int32Array.from(kept, (row) => file.lines[row]!),
+    lines: kept.map((row) => file.lines[row]!),
     quarantine: [...file.quarantine.map((row) => ({ source: id, ...row })), ...unplaced(id, file, kept, assigned)],
     problems: [...file.problems, ...problems],
   };
@@ -99,9 +97,26 @@ function cautions(
 
 function placedRows(columns: ReadonlyMap<MeasuredId, MeasuredColumn>, rows: number): Int32Array {
   const [ra, dec] = [columns.get('ra')?.values, columns.get('dec')?.values];
-  const placed: number[] = [];
-  for (let row = 0; row < rows; row++) if (ra && dec && !Number.isNaN(ra[row]! + dec[row]!)) placed.push(row);
-  return Int32Array.from(placed);
+  const placed = new Int32Array(rows);
+  let count = 0;
+  for (let row = 0; row < rows; row++) if (ra && dec && !Number.isNaN(ra[row]! + dec[row]!)) placed[count++] = row;
+  return placed.subarray(0, count);
+}
+
+/** Takes the kept rows of a column; the column itself where that is all of them. */
+function picker(kept: Int32Array, rows: number): (values: Float64Array) => Float64Array {
+  if (kept.length === rows) return (values) => values;
+  return (values) => {
+    const picked = new Float64Array(kept.length);
+    for (let at = 0; at < picked.length; at++) picked[at] = values[kept[at]!]!;
+    return picked;
+  };
+}
+
+function namesOf(name: Assigned | undefined, kept: Int32Array): string[] {
+  const names = new Array<string>(kept.length).fill('');
+  if (name) for (let at = 0; at < names.length; at++) names[at] = cellText(name.column, kept[at]!);
+  return names;
 }
 
 function mapColumns(
@@ -127,11 +142,13 @@ function unplaced(
   kept: Int32Array,
   roles: ReadonlyMap<RoleId, Assigned>,
 ): QuarantinedRow[] {
-  const placed = new Set(kept);
   const parts = (['ra', 'dec', 'gal_l', 'gal_b'] as const).flatMap((role) => roles.get(role) ?? []);
   const rows: QuarantinedRow[] = [];
-  for (let row = 0; row < file.table.rows; row++) {
-    if (placed.has(row)) continue;
+  for (let row = 0, next = 0; row < file.table.rows; row++) {
+    if (kept[next] === row) {
+      next++;
+      continue;
+    }
     const line = file.lines[row]!;
     const cells = parts.map(({ column }) => `${column.name} = "${cellText(column, row)}"`);
     const found = cells.length === 0 ? 'no column with a position' : cells.join(', ');

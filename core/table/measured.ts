@@ -14,3 +14,14 @@ export interface MeasuredTable {
   readonly rows: number;
   readonly columns: ReadonlyMap<MeasuredId, MeasuredColumn>;
 }
+
+/** A range of rows, the last one excluded, without copying. */
+export function measuredRows({ columns }: MeasuredTable, from: number, to: number): MeasuredTable {
+  const cut = ({ values, sigma, minus, plus }: MeasuredColumn): MeasuredColumn => ({
+    values: values.subarray(from, to),
+    sigma: sigma?.subarray(from, to),
+    minus: minus?.subarray(from, to),
+    plus: plus?.subarray(from, to),
+  });
+  return { rows: to - from, columns: new Map([...columns].map(([id, column]) => [id, cut(column)])) };
+}

@@ -9,7 +9,8 @@ export function csvRow(cells: readonly string[]): string {
   return `${cells.map(csvCell).join(',')}\n`;
 }
 
-function csvCell(cell: string): string {
+/** A cell of RFC 4180, in quotes where it must be. */
+export function csvCell(cell: string): string {
   return SPECIAL.test(cell) ? `"${cell.replaceAll('"', '""')}"` : cell;
 }
 
