@@ -5,7 +5,7 @@ import { DERIVED } from '../../core/quantities/registry';
 import { type MeasuredTable, measuredRows } from '../../core/table/measured';
 
 /** Rows derived at once: few enough for the processor's cache, whatever the size of the table. */
-const ROWS = 1 << 13;
+export const ROWS_AT_ONCE = 1 << 11;
 
 /** Names of the derived columns in their order, each followed by its error. */
 export const DERIVED_NAMES: readonly string[] = DERIVED.flatMap(({ id }) => [id, `${id}_error`]);
@@ -20,7 +20,7 @@ export function derivedRows(measured: MeasuredTable, options: DeriveOptions): (r
   return (row, to) => {
     if (row >= end) {
       from = row;
-      end = Math.min(measured.rows, row + ROWS);
+      end = Math.min(measured.rows, row + ROWS_AT_ONCE);
       const block = deriveQuantities(measuredRows(measured, from, end), options);
       columns = DERIVED.map(({ id }) => block.column(id));
     }

@@ -1,7 +1,7 @@
 import { KM_S_PER_MAS_YR_KPC, RAD } from './constants';
 import { galactocentric } from './galactocentric';
 import type { Observed } from './phase';
-import { bySkyBlocks, skyBasis } from './skybasis';
+import { skyBasis } from './sky';
 import type { SolarFrame } from './solarframes';
 
 /** 1σ errors of observed columns in the units of the columns; right ascension as an angle on the sky (times cos δ). */
@@ -28,30 +28,29 @@ export const TRIANGLE = 21;
  */
 export function phaseCovariance(observed: Observed, errors: ObservedErrors, frame: SolarFrame): Float64Array {
   const { rotation } = galactocentric(frame);
-  const packed = new Float64Array(TRIANGLE * observed.ra.length);
+  const { sky } = observed;
+  const packed = new Float64Array(TRIANGLE * sky.rows);
   const basis = new Float64Array(9);
   const jacobian = new Float64Array(36);
   const scaled = new Float64Array(36);
-  bySkyBlocks(observed.ra, observed.dec, (sky, from, to) => {
-    for (let row = from; row < to; row++) {
-      const at = row - from;
-      skyBasis(rotation, sky, at, basis);
-      fillJacobian(observed, row, basis, sky.sinDec[at]! / sky.cosDec[at]!, jacobian);
-      scaleColumns(errors, row, jacobian, scaled);
-      const rho = errors.pmCorrelation?.[row] ?? 0;
-      pack(scaled, Number.isNaN(rho) ? 0 : rho, packed, TRIANGLE * row);
-    }
-  });
+  for (let row = 0; row < sky.rows; row++) {
+    skyBasis(rotation, sky, row, basis);
+    fillJacobian(observed, row, basis, jacobian);
+    scaleColumns(errors, row, jacobian, scaled);
+    const rho = errors.pmCorrelation?.[row] ?? 0;
+    pack(scaled, Number.isNaN(rho) ? 0 : rho, packed, TRIANGLE * row);
+  }
   return packed;
 }
 
-/** d(x, y, z, v)/d(α*, δ, d, μ_α*, μ_δ, v_los), row-major, angles in radians; `tan` is that of the declination. */
-function fillJacobian(observed: Observed, row: number, basis: Float64Array, tan: number, jacobian: Float64Array): void {
+/** d(x, y, z, v)/d(α*, δ, d, μ_α*, μ_δ, v_los), row-major, angles in radians. */
+function fillJacobian(observed: Observed, row: number, basis: Float64Array, jacobian: Float64Array): void {
   const d = observed.distance[row]!;
   const kd = KM_S_PER_MAS_YR_KPC * d;
   const muA = observed.pmRa?.[row] ?? Number.NaN;
   const muD = observed.pmDec?.[row] ?? Number.NaN;
   const v = observed.vLos?.[row] ?? Number.NaN;
+  const tan = observed.sky.sinDec[row]! / observed.sky.cosDec[row]!;
   for (let axis = 0; axis < 3; axis++) {
     const out = basis[axis]!;
     const east = basis[3 + axis]!;

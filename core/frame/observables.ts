@@ -2,7 +2,7 @@ import { KM_S_PER_MAS_YR_KPC } from './constants';
 import { galactocentric } from './galactocentric';
 import { inverse, rotate, type Rotation, type Vector } from './rotation';
 import { direction } from './sphere';
-import { bySkyBlocks, skyBasis } from './skybasis';
+import { skyBasis, skyOf } from './sky';
 import type { SolarFrame } from './solarframes';
 
 /** What an observer at the Sun measures: ICRS degrees, kpc, mas/yr (μ_α cos δ), km/s. */
@@ -26,7 +26,7 @@ export function observe(position: Vector, velocity: Vector, frame: SolarFrame): 
   const distance = Math.hypot(...place);
   const [ra, dec] = direction(place);
   const basis = new Float64Array(9);
-  bySkyBlocks(Float64Array.of(ra), Float64Array.of(dec), (sky) => skyBasis(UNTURNED, sky, 0, basis));
+  skyBasis(UNTURNED, skyOf(Float64Array.of(ra), Float64Array.of(dec)), 0, basis);
   const along = (from: number): number =>
     motion[0] * basis[from]! + motion[1] * basis[from + 1]! + motion[2] * basis[from + 2]!;
   const scale = KM_S_PER_MAS_YR_KPC * distance;

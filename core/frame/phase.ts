@@ -1,12 +1,11 @@
 import { KM_S_PER_MAS_YR_KPC } from './constants';
 import { type Galactocentric, galactocentric } from './galactocentric';
-import { bySkyBlocks, skyBasis, type SkyBlock } from './skybasis';
+import { type Sky, skyBasis } from './sky';
 import type { SolarFrame } from './solarframes';
 
-/** Observed columns: ICRS degrees, kpc, mas/yr (μ_α cos δ), km/s. NaN is missing. */
+/** Observed columns: ICRS directions, kpc, mas/yr (μ_α cos δ), km/s. NaN is missing. */
 export interface Observed {
-  readonly ra: Float64Array;
-  readonly dec: Float64Array;
+  readonly sky: Sky;
   readonly distance: Float64Array;
   readonly pmRa?: Float64Array | undefined;
   readonly pmDec?: Float64Array | undefined;
@@ -28,7 +27,7 @@ export interface Phase {
 
 /** Turns observed columns into Galactocentric ones (see `galactocentric` for axes and definition). */
 export function phaseOf(observed: Observed, frame: SolarFrame): Phase {
-  const rows = observed.ra.length;
+  const { rows } = observed.sky;
   const column = (): Float64Array => new Float64Array(rows);
   const phase = {
     rows,
@@ -40,23 +39,16 @@ export function phaseOf(observed: Observed, frame: SolarFrame): Phase {
     vZ: column(),
     lsrSpeedKmS: frame.lsrSpeedKmS,
   };
-  const [there, basis] = [galactocentric(frame), new Float64Array(9)];
-  bySkyBlocks(observed.ra, observed.dec, (sky, from, to) => fill(observed, there, phase, sky, from, to, basis));
+  fill(observed, galactocentric(frame), phase);
   return phase;
 }
 
-function fill(
-  { distance, pmRa, pmDec, vLos }: Observed,
-  { rotation, offset, sun }: Galactocentric,
-  phase: Phase,
-  sky: SkyBlock,
-  from: number,
-  to: number,
-  basis: Float64Array,
-): void {
+function fill(observed: Observed, { rotation, offset, sun }: Galactocentric, phase: Phase): void {
+  const { sky, distance, pmRa, pmDec, vLos } = observed;
   const moving = pmRa !== undefined && pmDec !== undefined && vLos !== undefined;
-  for (let row = from; row < to; row++) {
-    skyBasis(rotation, sky, row - from, basis);
+  const basis = new Float64Array(9);
+  for (let row = 0; row < sky.rows; row++) {
+    skyBasis(rotation, sky, row, basis);
     const d = distance[row]!;
     phase.x[row] = d * basis[0]! + offset[0];
     phase.y[row] = d * basis[1]! + offset[1];

@@ -1,16 +1,15 @@
 import { RAD } from './constants';
 
 /**
- * Sines and cosines of the angles (degrees) from one index to another, written to `sin` and `cos` from their start; NaN
- * spreads.
+ * Sines and cosines of angles, degrees in, written to `sin` and `cos`; NaN spreads.
  *
  * Degrees are folded to ±45° first, which loses nothing, so that sin 180° is 0; the Taylor series end at x¹⁵ and x¹⁶ and
  * leave out less than 5e-17. No branch and no call in the loop, and terms in pairs, so that the processor need not wait
  * for one before the next.
  */
-export function sinCosDeg(angles: Float64Array, from: number, to: number, sin: Float64Array, cos: Float64Array): void {
-  for (let i = 0; i < to - from; i++) {
-    const angle = angles[from + i]!;
+export function sinCosDeg(angles: Float64Array, sin: Float64Array, cos: Float64Array): void {
+  for (let i = 0; i < angles.length; i++) {
+    const angle = angles[i]!;
     const quarters = Math.floor(angle * (1 / 90) + 0.5);
     const x = (angle - 90 * quarters) * RAD;
     const q = x * x;
@@ -44,11 +43,13 @@ export function sinCosDeg(angles: Float64Array, from: number, to: number, sin: F
  * NaN for the zero vector, which has none. Exact to two units in the last place of 180 for vectors longer than 1e-290.
  *
  * A vector is turned by 0°, 22.5° or 45° to lie within 11.25° of an axis; the arctangent's Taylor series then ends at q²¹
- * and leaves out less than 2e-17. Comparisons become numbers, not branches that no processor could foresee.
+ * and leaves out less than 2e-17. Comparisons become numbers, not branches that no processor could foresee,
+ * and nothing is taken apart from an array, which would be made anew for every row.
  */
 export function atan2Deg(y: Float64Array, x: Float64Array, to: Float64Array): void {
   for (let i = 0; i < to.length; i++) {
-    const [up, right] = [y[i]!, x[i]!];
+    const up = y[i]!;
+    const right = x[i]!;
     const across = Math.abs(up);
     const along = Math.abs(right);
     const steep = +(across > along);

@@ -1,5 +1,6 @@
 import { phaseCovariance } from '../frame/covariance';
 import { phaseOf, type Observed, type Phase } from '../frame/phase';
+import { type Sky, skyOf } from '../frame/sky';
 import type { SolarFrame } from '../frame/solarframes';
 import type { NumberColumn } from '../table/column';
 import type { MeasuredTable } from '../table/measured';
@@ -115,12 +116,15 @@ function lazyState(measured: MeasuredTable, frame: SolarFrame): State {
   const values = (id: MeasuredId): Float64Array | undefined => measured.columns.get(id)?.values;
   const sigma = (id: MeasuredId): Float64Array | undefined => measured.columns.get(id)?.sigma;
   const distance = once(() => heliocentricDistance(measured));
+  const sky = once((): Sky | undefined => {
+    const [ra, dec] = [values('ra'), values('dec')];
+    return ra && dec && skyOf(ra, dec);
+  });
   const observed = once((): Observed | undefined => {
-    const [ra, dec, far] = [values('ra'), values('dec'), distance()];
-    if (!ra || !dec || !far) return undefined;
+    const [directions, far] = [sky(), distance()];
+    if (!directions || !far) return undefined;
     return {
-      ra,
-      dec,
+      sky: directions,
       distance: far.values,
       pmRa: values('pm_ra'),
       pmDec: values('pm_dec'),
@@ -130,8 +134,8 @@ function lazyState(measured: MeasuredTable, frame: SolarFrame): State {
   return {
     distance,
     galactic: once(() => {
-      const [ra, dec] = [measured.columns.get('ra'), measured.columns.get('dec')];
-      return ra && dec && galacticColumns(ra, dec);
+      const directions = sky();
+      return directions && galacticColumns(directions, sigma('ra'), sigma('dec'));
     }),
     galactocentric: once(() => {
       const seen = observed();

@@ -1,40 +1,42 @@
 import { GALACTIC_FROM_ICRS } from '../frame/galactic';
-import { bySkyBlocks, SKY_BLOCK, skyBasis } from '../frame/skybasis';
+import { type Sky, skyBasis, turnedSky } from '../frame/sky';
 import { atan2Deg, turnPositive } from '../frame/trigonometry';
 import type { QuantityColumn } from './quantity';
 
 /**
- * Galactic longitude [0, 360) and latitude of every row, degrees. Their errors are the position errors turned to the
- * Galactic axes (right ascension's taken as an angle on the sky); NaN where a row has none.
+ * Galactic longitude [0, 360) and latitude of every row, degrees. Their errors are the position errors (degrees) turned
+ * to the Galactic axes (right ascension's taken as an angle on the sky); NaN where a row has none.
  */
-export function galacticColumns(ra: QuantityColumn, dec: QuantityColumn): { l: QuantityColumn; b: QuantityColumn } {
-  const rows = ra.values.length;
-  const [l, b] = [new Float64Array(rows), new Float64Array(rows)];
-  const [sigmaRa, sigmaDec] = [ra.sigma, dec.sigma];
-  const known = sigmaRa !== undefined && sigmaDec !== undefined;
-  const [sigmaL, sigmaB] = known ? [new Float64Array(rows), new Float64Array(rows)] : [];
+export function galacticColumns(
+  sky: Sky,
+  sigmaRa: Float64Array | undefined,
+  sigmaDec: Float64Array | undefined,
+): { l: QuantityColumn; b: QuantityColumn } {
+  const [l, b] = [new Float64Array(sky.rows), new Float64Array(sky.rows)];
+  const [x, level] = [new Float64Array(sky.rows), new Float64Array(sky.rows)];
+  // Longitudes and latitudes take the place of y and z.
+  turnedSky(GALACTIC_FROM_ICRS, sky, x, l, b);
+  for (let row = 0; row < sky.rows; row++) level[row] = Math.sqrt(x[row]! * x[row]! + l[row]! * l[row]!);
+  atan2Deg(b, level, b);
+  atan2Deg(l, x, l);
+  turnPositive(l);
+  const errors = sigmaRa && sigmaDec && galacticErrors(sky, sigmaRa, sigmaDec);
+  return { l: { values: l, sigma: errors?.l }, b: { values: b, sigma: errors?.b } };
+}
+
+function galacticErrors(sky: Sky, sigmaRa: Float64Array, sigmaDec: Float64Array): { l: Float64Array; b: Float64Array } {
+  const [l, b] = [new Float64Array(sky.rows), new Float64Array(sky.rows)];
   const basis = new Float64Array(9);
-  const scratch = (): Float64Array => new Float64Array(SKY_BLOCK);
-  const [x, y, z, level] = [scratch(), scratch(), scratch(), scratch()];
-  bySkyBlocks(ra.values, dec.values, (sky, from, to) => {
-    const [longitudes, latitudes] = [l.subarray(from, to), b.subarray(from, to)];
-    for (let at = 0; at < to - from; at++) {
-      skyBasis(GALACTIC_FROM_ICRS, sky, at, basis);
-      const cosB = Math.sqrt(basis[0]! * basis[0]! + basis[1]! * basis[1]!);
-      x[at] = basis[0]!;
-      y[at] = basis[1]!;
-      z[at] = basis[2]!;
-      level[at] = cosB;
-      if (!known) continue;
-      // The Galactic z component of east and north is cos b times the sine and cosine of the angle between the axes.
-      const [sin, cos] = [basis[5]! / cosB, basis[8]! / cosB];
-      const [east, north] = [sigmaRa[from + at]!, sigmaDec[from + at]!];
-      sigmaL![from + at] = Math.hypot(cos * east, sin * north) / cosB;
-      sigmaB![from + at] = Math.hypot(sin * east, cos * north);
-    }
-    atan2Deg(y, x, longitudes);
-    turnPositive(longitudes);
-    atan2Deg(z, level, latitudes);
-  });
-  return { l: { values: l, sigma: sigmaL }, b: { values: b, sigma: sigmaB } };
+  for (let row = 0; row < sky.rows; row++) {
+    skyBasis(GALACTIC_FROM_ICRS, sky, row, basis);
+    const cosB = Math.sqrt(basis[0]! * basis[0]! + basis[1]! * basis[1]!);
+    // The Galactic z component of east and north is cos b times the sine and cosine of the angle between the axes.
+    const sin = basis[5]! / cosB;
+    const cos = basis[8]! / cosB;
+    const east = sigmaRa[row]!;
+    const north = sigmaDec[row]!;
+    l[row] = Math.sqrt((cos * east) ** 2 + (sin * north) ** 2) / cosB;
+    b[row] = Math.sqrt((sin * east) ** 2 + (cos * north) ** 2);
+  }
+  return { l, b };
 }

@@ -5,7 +5,12 @@ import { poleLatitudes, poleLongitudes } from './momenta';
 
 /** Writes the gradient of a·(r × v) for a vector a that is taken as fixed. */
 function along(p: Phase, i: number, to: Float64Array, ax: number, ay: number, az: number): void {
-  const [x, y, z, vX, vY, vZ] = [p.x[i]!, p.y[i]!, p.z[i]!, p.vX[i]!, p.vY[i]!, p.vZ[i]!];
+  const x = p.x[i]!;
+  const y = p.y[i]!;
+  const z = p.z[i]!;
+  const vX = p.vX[i]!;
+  const vY = p.vY[i]!;
+  const vZ = p.vZ[i]!;
   put(to, vY * az - vZ * ay, vZ * ax - vX * az, vX * ay - vY * ax, ay * z - az * y, az * x - ax * z, ax * y - ay * x);
 }
 

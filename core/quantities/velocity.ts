@@ -11,7 +11,9 @@ function alongCylR(state: GalactocentricState): Gradient {
   const [{ cylR }, { vCylR }] = [state.places(), state.motions()];
   return (i, to) => {
     const R = cylR[i]!;
-    const [cos, sin, v] = [x[i]! / R, y[i]! / R, vCylR[i]!];
+    const cos = x[i]! / R;
+    const sin = y[i]! / R;
+    const v = vCylR[i]!;
     put(to, (vX[i]! - v * cos) / R, (vY[i]! - v * sin) / R, 0, cos, sin, 0);
   };
 }
@@ -21,7 +23,9 @@ function alongPhi(state: GalactocentricState): Gradient {
   const [{ cylR }, { vPhi }] = [state.places(), state.motions()];
   return (i, to) => {
     const R = cylR[i]!;
-    const [cos, sin, v] = [x[i]! / R, y[i]! / R, vPhi[i]!];
+    const cos = x[i]! / R;
+    const sin = y[i]! / R;
+    const v = vPhi[i]!;
     put(to, (-vY[i]! - v * cos) / R, (vX[i]! - v * sin) / R, 0, sin, -cos, 0);
   };
 }
@@ -31,7 +35,10 @@ function alongR(state: GalactocentricState): Gradient {
   const [{ r: radius }, { vR }] = [state.places(), state.motions()];
   return (i, to) => {
     const r = radius[i]!;
-    const [ux, uy, uz, v] = [x[i]! / r, y[i]! / r, z[i]! / r, vR[i]!];
+    const ux = x[i]! / r;
+    const uy = y[i]! / r;
+    const uz = z[i]! / r;
+    const v = vR[i]!;
     put(to, (vX[i]! - v * ux) / r, (vY[i]! - v * uy) / r, (vZ[i]! - v * uz) / r, ux, uy, uz);
   };
 }
@@ -40,12 +47,18 @@ function alongTheta(state: GalactocentricState): Gradient {
   const { x, y, z, vX, vY, vZ } = state.phase;
   const [{ cylR, r: radius }, { vCylR, vTheta }] = [state.places(), state.motions()];
   return (i, to) => {
-    const [R, r, out] = [cylR[i]!, radius[i]!, vCylR[i]!];
-    const [cos, sin, up] = [x[i]! / R, y[i]! / R, vZ[i]!];
+    const R = cylR[i]!;
+    const r = radius[i]!;
+    const out = vCylR[i]!;
+    const cos = x[i]! / R;
+    const sin = y[i]! / R;
+    const up = vZ[i]!;
     const byX = (z[i]! * (vX[i]! - out * cos)) / R - cos * up;
     const byY = (z[i]! * (vY[i]! - out * sin)) / R - sin * up;
     const perR = vTheta[i]! / r;
-    const [toX, toY, toZ] = [(byX - perR * x[i]!) / r, (byY - perR * y[i]!) / r, (out - perR * z[i]!) / r];
+    const toX = (byX - perR * x[i]!) / r;
+    const toY = (byY - perR * y[i]!) / r;
+    const toZ = (out - perR * z[i]!) / r;
     put(to, toX, toY, toZ, (z[i]! * cos) / r, (z[i]! * sin) / r, -R / r);
   };
 }
@@ -57,8 +70,11 @@ function tangential(state: GalactocentricState): Gradient {
   const radial = alongR(state);
   return (i, to) => {
     radial(i, to);
-    const [v, share] = [vT[i]!, vR[i]! / vT[i]!];
-    const [toX, toY, toZ] = [-share * to[0]!, -share * to[1]!, -share * to[2]!];
+    const v = vT[i]!;
+    const share = vR[i]! / vT[i]!;
+    const toX = -share * to[0]!;
+    const toY = -share * to[1]!;
+    const toZ = -share * to[2]!;
     put(to, toX, toY, toZ, vX[i]! / v - share * to[3]!, vY[i]! / v - share * to[4]!, vZ[i]! / v - share * to[5]!);
   };
 }
@@ -76,8 +92,11 @@ function toomre(state: GalactocentricState): Gradient {
   const turning = alongPhi(state);
   return (i, to) => {
     turning(i, to);
-    const [v, share] = [toomreSpeed[i]!, lsrSpeedKmS / toomreSpeed[i]!];
-    const [toX, toY, toZ] = [-share * to[0]!, -share * to[1]!, -share * to[2]!];
+    const v = toomreSpeed[i]!;
+    const share = lsrSpeedKmS / toomreSpeed[i]!;
+    const toX = -share * to[0]!;
+    const toY = -share * to[1]!;
+    const toZ = -share * to[2]!;
     put(to, toX, toY, toZ, vX[i]! / v - share * to[3]!, vY[i]! / v - share * to[4]!, vZ[i]! / v - share * to[5]!);
   };
 }

@@ -1,13 +1,10 @@
-import { execFileSync } from 'node:child_process';
-import { cpus } from 'node:os';
 import type { Judged } from '../../core/cuts/contract';
 import type { Cut } from '../../core/cuts/cut';
 import { judgedObjects } from '../../core/cuts/judged';
 import { judgeLedger } from '../../core/cuts/ledger';
 import { outcomeCache } from '../../core/cuts/outcomecache';
 import type { QuantityColumn } from '../../core/quantities/quantity';
-
-export const name = 'ledger of six cuts, one limit moved';
+import { median, python, show } from './table';
 
 const ROWS = 1_000_000;
 const STEPS = 41;
@@ -98,76 +95,33 @@ function ledger(fehMax: number): Cut[] {
   ];
 }
 
-function median(times: readonly number[]): number {
-  return [...times].sort((a, b) => a - b)[times.length >> 1] ?? Number.NaN;
-}
-
 function timed(step: () => unknown): number {
   const start = performance.now();
   step();
   return performance.now() - start;
 }
 
-/** The same limit, moved, and the combination of six masks with counts, in numpy; undefined where there is none. */
-function numpyMs(): number | undefined {
-  const script = `
-import time, numpy as np
-rng = np.random.default_rng(1)
-n = ${ROWS}
-feh, sigma = rng.normal(-1.4, 0.5, n), np.full(n, 0.1)
-others = [rng.random(n) < 0.7 for _ in range(5)]
-def step(limit):
-    sure, passes, possible = feh + sigma <= limit, feh <= limit, feh - sigma <= limit
-    unknown = np.isnan(feh)
-    for mask in others:
-        sure, passes, possible = sure & mask, passes & mask, possible & mask
-    verdict = np.where(sure, 0, np.where(~possible, 2, np.where(unknown, 3, 1))).astype(np.uint8)
-    masks = [feh <= limit] + others
-    fails = np.zeros(n, np.uint8)
-    for mask in masks:
-        fails += ~mask
-    left, table = np.ones(n, bool), []
-    for mask in masks:
-        left = left & mask
-        table.append((left.sum(), (~mask).sum(), (~mask & (fails == 1)).sum()))
-    return verdict, np.bincount(verdict, minlength=4), table
-times = []
-for i in range(${STEPS}):
-    start = time.perf_counter(); step(-1 - 0.001 * i); times.append(time.perf_counter() - start)
-print(sorted(times)[${STEPS >> 1}] * 1000)`;
-  try {
-    return Number(
-      execFileSync('/usr/bin/python3', ['-c', script], { encoding: 'utf8', stdio: ['ignore', 'pipe', 'ignore'] }),
-    );
-  } catch {
-    return undefined;
-  }
-}
-
-/** Rows of a table: what was done, milliseconds (median), beside. */
-export function run(): Promise<string[][]> {
-  const objects = invented();
-  const cache = outcomeCache();
-  const judge = (cuts: readonly Cut[]): unknown => judgeLedger(cuts, objects, { margin: 1, cache });
-  const first = timed(() => judge(ledger(-1)));
-  const moved = Array.from({ length: STEPS }, (_, at) => timed(() => judge(ledger(-1.001 - 0.001 * at))));
-  const turned = Array.from({ length: 5 }, (_, at) => {
-    const pole = { ...PLANE, parameters: { ...PLANE.parameters, poleL: 200 + at } };
-    return timed(() => judge(ledger(-1).with(3, pole)));
-  });
-  const drawn = Array.from({ length: 5 }, (_, at) => {
-    const shape = { ...LASSO, parameters: { ...LASSO.parameters, polygon: BAND.map(([x, y]) => [x + at / 100, y]) } };
-    return timed(() => judge(ledger(-1).with(5, shape as Cut)));
-  });
-  const numpy = numpyMs();
-  const ms = (value: number): string => `${value.toFixed(1)} ms`;
-  const beside = numpy === undefined ? 'numpy not here' : `numpy ${ms(numpy)}`;
-  return Promise.resolve([
-    [`${ROWS.toLocaleString('en')} objects, ${cpus()[0]?.model ?? ''}`, 'median', 'beside'],
-    ['one limit moved: verdicts, counts, attrition', ms(median(moved)), beside],
-    ['slowest of these moves', ms(Math.max(...moved)), ''],
-    ['a new pole', ms(median(turned)), ''],
-    ['a new lasso of 60 vertices, with errors', ms(median(drawn)), ''],
-    ['whole ledger, first time', ms(first), ''],
-  ]);
-}
+const objects = invented();
+const cache = outcomeCache();
+const judge = (cuts: readonly Cut[]): unknown => judgeLedger(cuts, objects, { margin: 1, cache });
+const first = timed(() => judge(ledger(-1)));
+const moved = Array.from({ length: STEPS }, (_, at) => timed(() => judge(ledger(-1.001 - 0.001 * at))));
+const turned = Array.from({ length: 5 }, (_, at) => {
+  const pole = { ...PLANE, parameters: { ...PLANE.parameters, poleL: 200 + at } };
+  return timed(() => judge(ledger(-1).with(3, pole)));
+});
+const drawn = Array.from({ length: 5 }, (_, at) => {
+  const shape = { ...LASSO, parameters: { ...LASSO.parameters, polygon: BAND.map(([x, y]) => [x + at / 100, y]) } };
+  return timed(() => judge(ledger(-1).with(5, shape as Cut)));
+});
+const numpy = python('ledger_numpy.py', String(ROWS), String(STEPS));
+const ms = (value: number): string => `${value.toFixed(1)} ms`;
+const beside = numpy === undefined ? 'numpy not here' : `numpy ${ms(Number(numpy))}`;
+show(`ledger of six cuts on ${ROWS.toLocaleString('en')} objects, milliseconds`, [
+  ['', 'median', 'beside'],
+  ['one limit moved: verdicts, counts, attrition', ms(median(moved)), beside],
+  ['slowest of these moves', ms(Math.max(...moved)), ''],
+  ['a new pole', ms(median(turned)), ''],
+  ['a new lasso of 60 vertices, with errors', ms(median(drawn)), ''],
+  ['whole ledger, first time', ms(first), ''],
+]);

@@ -1,6 +1,7 @@
 import { expect, test } from 'vitest';
 import { observe } from '../../../core/frame/observables';
 import { phaseOf } from '../../../core/frame/phase';
+import { skyOf } from '../../../core/frame/sky';
 import { SOLAR_FRAMES } from '../../../core/frame/solarframes';
 import { dice } from '../../../core/mock/dice';
 import { drawTracer, type Population } from '../../../core/mock/galaxy';
@@ -17,8 +18,7 @@ test('what is observed goes back to the same place and motion in every solar fra
       const one = (value: number): Float64Array => Float64Array.of(value);
       const back = phaseOf(
         {
-          ra: one(seenThere.ra),
-          dec: one(seenThere.dec),
+          sky: skyOf(one(seenThere.ra), one(seenThere.dec)),
           distance: one(seenThere.distance),
           pmRa: one(seenThere.pmRa),
           pmDec: one(seenThere.pmDec),
