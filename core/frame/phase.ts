@@ -45,19 +45,20 @@ export function phaseOf(observed: Observed, frame: SolarFrame): Phase {
 
 function fill(observed: Observed, { rotation, offset, sun }: Galactocentric, phase: Phase): void {
   const { sky, distance, pmRa, pmDec, vLos } = observed;
+  const { x, y, z, vX, vY, vZ } = phase;
   const moving = pmRa !== undefined && pmDec !== undefined && vLos !== undefined;
   const basis = new Float64Array(9);
   for (let row = 0; row < sky.rows; row++) {
     skyBasis(rotation, sky, row, basis);
     const d = distance[row]!;
-    phase.x[row] = d * basis[0]! + offset[0];
-    phase.y[row] = d * basis[1]! + offset[1];
-    phase.z[row] = d * basis[2]! + offset[2];
+    x[row] = d * basis[0]! + offset[0];
+    y[row] = d * basis[1]! + offset[1];
+    z[row] = d * basis[2]! + offset[2];
     const east = moving ? KM_S_PER_MAS_YR_KPC * d * pmRa[row]! : Number.NaN;
     const north = moving ? KM_S_PER_MAS_YR_KPC * d * pmDec[row]! : Number.NaN;
     const out = moving ? vLos[row]! : Number.NaN;
-    phase.vX[row] = out * basis[0]! + east * basis[3]! + north * basis[6]! + sun[0];
-    phase.vY[row] = out * basis[1]! + east * basis[4]! + north * basis[7]! + sun[1];
-    phase.vZ[row] = out * basis[2]! + east * basis[5]! + north * basis[8]! + sun[2];
+    vX[row] = out * basis[0]! + east * basis[3]! + north * basis[6]! + sun[0];
+    vY[row] = out * basis[1]! + east * basis[4]! + north * basis[7]! + sun[1];
+    vZ[row] = out * basis[2]! + east * basis[5]! + north * basis[8]! + sun[2];
   }
 }

@@ -1,4 +1,4 @@
-import type { MeasuredTable } from '../table/measured';
+import type { MeasuredColumn, MeasuredTable } from '../table/measured';
 import { givesDistance } from '../table/parallax';
 import type { QuantityColumn } from './quantity';
 
@@ -14,24 +14,40 @@ export function heliocentricDistance(table: MeasuredTable): QuantityColumn | und
     table.columns.get(id),
   );
   if (!modulus && !direct && !parallax) return undefined;
-  const [values, sigma] = [new Float64Array(table.rows), new Float64Array(table.rows)];
-  for (let row = 0; row < table.rows; row++) {
-    const mu = modulus?.values[row] ?? Number.NaN;
-    const d = direct?.values[row] ?? Number.NaN;
-    const plx = parallax?.values[row] ?? Number.NaN;
-    const plxSigma = parallax?.sigma?.[row] ?? Number.NaN;
-    if (!Number.isNaN(mu)) {
-      values[row] = 10 ** (mu / 5 - 2);
-      sigma[row] = values[row]! * (Math.LN10 / 5) * (modulus?.sigma?.[row] ?? Number.NaN);
-    } else if (d > 0) {
-      values[row] = d;
-      sigma[row] = direct?.sigma?.[row] ?? Number.NaN;
-    } else if (givesDistance(plx, plxSigma)) {
-      values[row] = 1 / plx;
-      sigma[row] = plxSigma / (plx * plx);
-    } else {
-      values[row] = sigma[row] = Number.NaN;
-    }
-  }
+  const values = new Float64Array(table.rows).fill(Number.NaN);
+  const sigma = new Float64Array(table.rows).fill(Number.NaN);
+  // From the last choice to the first.
+  if (parallax) fromParallax(parallax, values, sigma);
+  if (direct) fromDistance(direct, values, sigma);
+  if (modulus) fromModulus(modulus, values, sigma);
   return { values, sigma };
+}
+
+function fromParallax(parallax: MeasuredColumn, values: Float64Array, sigma: Float64Array): void {
+  for (let row = 0; row < values.length; row++) {
+    const measured = parallax.values[row]!;
+    const error = parallax.sigma?.[row] ?? Number.NaN;
+    if (!givesDistance(measured, error)) continue;
+    values[row] = 1 / measured;
+    sigma[row] = error / (measured * measured);
+  }
+}
+
+function fromDistance(direct: MeasuredColumn, values: Float64Array, sigma: Float64Array): void {
+  for (let row = 0; row < values.length; row++) {
+    const measured = direct.values[row]!;
+    if (!(measured > 0)) continue;
+    values[row] = measured;
+    sigma[row] = direct.sigma?.[row] ?? Number.NaN;
+  }
+}
+
+function fromModulus(modulus: MeasuredColumn, values: Float64Array, sigma: Float64Array): void {
+  for (let row = 0; row < values.length; row++) {
+    const measured = modulus.values[row]!;
+    if (Number.isNaN(measured)) continue;
+    const distance = 10 ** (measured / 5 - 2);
+    values[row] = distance;
+    sigma[row] = distance * (Math.LN10 / 5) * (modulus.sigma?.[row] ?? Number.NaN);
+  }
 }

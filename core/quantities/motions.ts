@@ -25,15 +25,16 @@ export function motionsOf(phase: Phase, { cylR, r }: Places, { total }: Momenta)
   const [vT, speed, toomreSpeed] = [column(), column(), column()];
   for (let i = 0; i < rows; i++) {
     const level = x[i]! * vX[i]! + y[i]! * vY[i]!;
+    const perR = 1 / r[i]!;
     const out = level / cylR[i]!;
     const turn = (y[i]! * vX[i]! - x[i]! * vY[i]!) / cylR[i]!;
     const up = vZ[i]!;
     const lag = turn - lsrSpeedKmS;
     vCylR[i] = out;
     vPhi[i] = turn;
-    vR[i] = (level + z[i]! * up) / r[i]!;
-    vTheta[i] = (z[i]! * out - cylR[i]! * up) / r[i]!;
-    vT[i] = total[i]! / r[i]!;
+    vR[i] = (level + z[i]! * up) * perR;
+    vTheta[i] = (z[i]! * out - cylR[i]! * up) * perR;
+    vT[i] = total[i]! * perR;
     speed[i] = Math.sqrt(vX[i]! * vX[i]! + vY[i]! * vY[i]! + up * up);
     toomreSpeed[i] = Math.sqrt(out * out + lag * lag + up * up);
   }
