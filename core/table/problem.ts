@@ -32,6 +32,7 @@ export type ProblemCode =
   | 'recipe-version'
   | 'recipe-invalid'
   | 'bench-in-use'
+  | 'unsaved-left'
   | 'rationale-missing'
   | 'empty-sample'
   | 'edition-not-found'

@@ -143,6 +143,10 @@ const WORDINGS: Readonly<Record<ProblemCode, Wording>> = {
     says: (p) => `another Halosieve has this bench open (process ${or(p.found, 'unknown')})`,
     remedy: 'Use that window, or close it first.',
   },
+  'unsaved-left': {
+    says: (p) => `unsaved work of an earlier bench is kept here: ${or(p.found, 'a bench')}`,
+    remedy: 'Open this file to go on with it; it stays until the bench is saved or reverted.',
+  },
   'rationale-missing': {
     says: (p) => `${or(p.found, 'a cut')} is switched on without a rationale`,
     remedy: 'Write why the cut stands where it stands, or switch it off.',
