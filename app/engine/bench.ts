@@ -68,8 +68,8 @@ export class Bench {
       const place = recipePlace(this.#host.stateFolder, full);
       return this.#begin(place, () => recipeStart(place, full));
     }
-    await this.create();
-    return this.change({ type: 'add-source', path: full });
+    const place = newPlace(this.#host.stateFolder);
+    return this.#begin(place, () => this.#catalogueStart(place, full));
   }
 
   async create(): Promise<BenchView> {
@@ -188,8 +188,17 @@ export class Bench {
     this.#lock = lock;
     this.#lastEdition = undefined;
     this.#autosave = this.#newAutosave(place);
+    if (this.#history.past.length > 0) this.#autosave.keep(this.#history, this.#base);
     this.#notices = await leftBenches(this.#host.stateFolder, place.keptIn);
     return this.#show();
+  }
+
+  async #catalogueStart(place: Place, path: string): Promise<Start> {
+    const empty = emptyRecipe('New sample');
+    const change = { type: 'add-source', path } as const;
+    const source = await this.#stoppable((options) => sourceOfChange(change, empty, place, options));
+    const { recipe, label } = applyChange(empty, change, { now: this.#host.now(), nameOf: (key) => key, source });
+    return { history: advance(begin(empty), recipe, label), base: undefined, restored: false };
   }
 
   /** Moves lock and autosave to another recipe file. */
