@@ -6,7 +6,7 @@ import type { BenchView, Change, FreezeResult } from '../contract/messages';
 import { type Autosave, autosave, readAutosave } from './autosave';
 import { applyChange } from './changes';
 import { readText, sha256, writeWhole } from './files';
-import { advance, begin, type History, redo, undo } from './history';
+import { advance, begin, type History, mapRecipes, redo, undo } from './history';
 import type { EngineHost, Heard } from './host';
 import { leftBenches } from './leftbenches';
 import { type BenchLock, lockBench } from './lock';
@@ -101,15 +101,12 @@ export class Bench {
     const target = path === undefined ? own : resolve(path.endsWith('.json') ? path : `${path}.halosieve.json`);
     if (target === undefined)
       fail('file-missing', { found: 'the bench has no recipe file yet', remedy: 'Choose where to save it.' });
-    const { recipe: before } = this.#history;
-    const place = recipePlace(this.#host.stateFolder, target);
-    const recipe = target === own ? before : rebased(before, this.folder, place.folder);
-    const text = recipeText(recipe);
-    await writeWhole(target, text);
-    const history = { ...this.#history, recipe };
-    if (target !== own) await this.#take(place);
-    this.#base = sha256(text);
-    await this.#become(history);
+    if (target === own) {
+      const text = recipeText(this.#history.recipe);
+      await writeWhole(target, text);
+      this.#base = sha256(text);
+    } else await this.#moveTo(recipePlace(this.#host.stateFolder, target), target);
+    this.#autosave?.keep(this.#history, this.#base);
     this.#show();
     return { path: target };
   }
@@ -201,13 +198,22 @@ export class Bench {
     return { history: advance(begin(empty), recipe, label), base: undefined, restored: false };
   }
 
-  /** Moves lock and autosave to another recipe file. */
-  async #take(place: Place): Promise<void> {
-    const lock = lockBench(place.lock, place.recipePath);
+  /** Writes the recipe to another file and moves there with lock, history and autosave; all of it or nothing. */
+  async #moveTo(place: Place, path: string): Promise<void> {
+    const history = mapRecipes(this.#history, (recipe) => rebased(recipe, this.folder, place.folder));
+    const text = recipeText(history.recipe);
+    const lock = lockBench(place.lock, path);
+    try {
+      const session = await this.#read(history.recipe, place.folder, this.#session);
+      await writeWhole(path, text);
+      this.#session = session;
+    } catch (error) {
+      lock.release();
+      throw error;
+    }
     await this.#autosave?.forget();
     this.#lock?.release();
-    this.#lock = lock;
-    this.#place = place;
+    [this.#place, this.#history, this.#base, this.#lock] = [place, history, sha256(text), lock];
     this.#autosave = this.#newAutosave(place);
   }
 
