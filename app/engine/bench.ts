@@ -1,12 +1,13 @@
-import { basename, resolve } from 'node:path';
+import { resolve } from 'node:path';
 import type { Recipe } from '../../core/edition/recipe';
-import { emptyRecipe, parseRecipe, recipeText } from '../../core/edition/recipefile';
+import { recipeText } from '../../core/edition/recipefile';
 import { fail, type Problem } from '../../core/table/problem';
 import type { BenchView, Change, FreezeResult } from '../contract/messages';
-import { type Autosave, autosave, readAutosave } from './autosave';
+import { type Autosave, autosave } from './autosave';
+import { emptyStart, keptStart, recipeStart, refuseEdited, type Start } from './benchstart';
 import { applyChange } from './changes';
-import { readText, sha256, writeWhole } from './files';
-import { advance, begin, type History, mapRecipes, redo, undo } from './history';
+import { sha256, writeWhole } from './files';
+import { advance, type History, mapRecipes, redo, undo } from './history';
 import type { EngineHost, Heard } from './host';
 import { leftBenches } from './leftbenches';
 import { type BenchLock, lockBench } from './lock';
@@ -18,22 +19,14 @@ import { benchView, worded } from './views';
 
 type Freeze = (prepared: Prepared, folder: string, options: { now: string; version: string }) => Promise<FreezeResult>;
 
-/** What a bench begins with. */
-interface Start {
-  readonly history: History;
-  /** Hash of the recipe file. */
-  readonly base: string | undefined;
-  readonly restored: boolean;
-}
-
 /** The open working session: recipe, data, undo history, autosave, lock. */
 export class Bench {
   readonly #host: EngineHost;
   readonly #tell: Heard;
-  #history: History = begin(emptyRecipe('New sample'));
+  #history: History = emptyStart().history;
   #session: Session | undefined;
   #place: Place;
-  /** Hash of the recipe file as it stands on disk. */
+  /** Hash of the recipe file as it was read or written last. */
   #base: string | undefined;
   #restored = false;
   #notices: readonly Problem[] = [];
@@ -73,8 +66,7 @@ export class Bench {
   }
 
   async create(): Promise<BenchView> {
-    const start = { history: begin(emptyRecipe('New sample')), base: undefined, restored: false };
-    return this.#begin(newPlace(this.#host.stateFolder), () => Promise.resolve(start));
+    return this.#begin(newPlace(this.#host.stateFolder), () => Promise.resolve(emptyStart()));
   }
 
   /** Applies a change; further ones of the same gesture join its step. */
@@ -103,10 +95,13 @@ export class Bench {
       fail('file-missing', { found: 'the bench has no recipe file yet', remedy: 'Choose where to save it.' });
     if (target === own) {
       const text = recipeText(this.#history.recipe);
+      await refuseEdited(target, this.#base, text);
       await writeWhole(target, text);
       this.#base = sha256(text);
     } else await this.#moveTo(recipePlace(this.#host.stateFolder, target), target);
     this.#autosave?.keep(this.#history, this.#base);
+    await this.#autosave?.settled();
+    this.#notices = this.#notices.filter(({ code }) => code !== 'work-beside-edit');
     this.#show();
     return { path: target };
   }
@@ -172,9 +167,12 @@ export class Bench {
   async #begin(place: Place, start: () => Promise<Start>): Promise<BenchView> {
     const same = place.keptIn === this.#place.keptIn ? this.#lock : undefined;
     const lock = same ?? lockBench(place.lock, place.recipePath ?? place.keptIn);
+    let notice: Problem | undefined;
     try {
       await this.#autosave?.settled();
-      const { history, base, restored } = await start();
+      const begun = await start();
+      const { history, base, restored } = begun;
+      notice = begun.notice;
       this.#session = await this.#read(history.recipe, place.folder, undefined);
       [this.#place, this.#history, this.#base, this.#restored] = [place, history, base, restored];
     } catch (error) {
@@ -186,16 +184,20 @@ export class Bench {
     this.#lastEdition = undefined;
     this.#autosave = this.#newAutosave(place);
     if (this.#history.past.length > 0) this.#autosave.keep(this.#history, this.#base);
-    this.#notices = await leftBenches(this.#host.stateFolder, place.keptIn);
+    this.#notices = [...(notice ? [notice] : []), ...(await leftBenches(this.#host.stateFolder, place.keptIn))];
     return this.#show();
   }
 
   async #catalogueStart(place: Place, path: string): Promise<Start> {
-    const empty = emptyRecipe('New sample');
+    const { history } = emptyStart();
     const change = { type: 'add-source', path } as const;
-    const source = await this.#stoppable((options) => sourceOfChange(change, empty, place, options));
-    const { recipe, label } = applyChange(empty, change, { now: this.#host.now(), nameOf: (key) => key, source });
-    return { history: advance(begin(empty), recipe, label), base: undefined, restored: false };
+    const source = await this.#stoppable((options) => sourceOfChange(change, history.recipe, place, options));
+    const { recipe, label } = applyChange(history.recipe, change, {
+      now: this.#host.now(),
+      nameOf: (key) => key,
+      source,
+    });
+    return { history: advance(history, recipe, label), base: undefined, restored: false };
   }
 
   /** Writes the recipe to another file and moves there with lock, history and autosave; all of it or nothing. */
@@ -253,21 +255,4 @@ export class Bench {
     this.#tell('bench', view);
     return view;
   }
-}
-
-/** A recipe file, or the unsaved work that was kept of it. */
-async function recipeStart({ keptIn }: Place, path: string): Promise<Start> {
-  const text = await readText(path);
-  const recipe = parseRecipe(text, basename(path));
-  const base = sha256(text);
-  const kept = await readAutosave(keptIn);
-  if (!kept || kept.history.past.length + kept.history.future.length === 0)
-    return { history: begin(recipe), base, restored: false };
-  return { history: kept.history, base, restored: recipeText(kept.history.recipe) !== recipeText(recipe) };
-}
-
-/** An unsaved bench as it was left. */
-async function keptStart({ keptIn }: Place): Promise<Start> {
-  const kept = (await readAutosave(keptIn)) ?? fail('file-unreadable', { where: keptIn, found: 'no unsaved work' });
-  return { history: kept.history, base: undefined, restored: true };
 }

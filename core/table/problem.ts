@@ -33,6 +33,8 @@ export type ProblemCode =
   | 'recipe-invalid'
   | 'bench-in-use'
   | 'unsaved-left'
+  | 'recipe-edited'
+  | 'work-beside-edit'
   | 'rationale-missing'
   | 'empty-sample'
   | 'edition-not-found'
