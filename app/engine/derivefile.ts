@@ -1,8 +1,5 @@
-import { createReadStream, createWriteStream } from 'node:fs';
-import { rename, rm, stat } from 'node:fs/promises';
-import { once } from 'node:events';
-import { basename, dirname, join } from 'node:path';
-import { randomBytes } from 'node:crypto';
+import { stat } from 'node:fs/promises';
+import { basename } from 'node:path';
 import { cellTexts, eachRecord } from '../../core/formats/csv/records';
 import { csvRow } from '../../core/formats/csv/write';
 import type { SolarFrame } from '../../core/frame/solarframes';
@@ -15,7 +12,7 @@ import { numberText } from '../../core/table/column';
 import { fail, type Problem } from '../../core/table/problem';
 import type { Progress } from '../contract/messages';
 import { guessedMeanings } from './columnview';
-import { fileProblem, withFile } from './files';
+import { fileChunks, wholeFile, withFile } from './files';
 import { readSourceFile } from './sourcefile';
 
 export interface DeriveFileOptions {
@@ -38,9 +35,6 @@ export interface DeriveSummary {
   readonly renamed: readonly { readonly from: string; readonly to: string }[];
   readonly problems: readonly Problem[];
 }
-
-/** Cells written at once. */
-const BLOCK = 1 << 20;
 
 /**
  * Writes a table's own cells, as they stand, and behind them every derived quantity with its error: one row per input
@@ -65,11 +59,10 @@ export async function deriveFile(inPath: string, outPath: string, options: Deriv
   const taken = new Set(DERIVED.flatMap(({ id }) => [id, `${id}_error`]));
   const renamed: { from: string; to: string }[] = [];
 
-  const out = await temporaryWriter(outPath);
+  const out = await wholeFile(outPath);
   let [rows, placed] = [0, 0];
   try {
     let block = '';
-    const chunks = createReadStream(inPath, { highWaterMark: BLOCK });
     const onBytes = progress(`Writing ${basename(outPath)}`);
     const sink = {
       heading({ header }: { header: readonly string[] }): void {
@@ -85,7 +78,7 @@ export async function deriveFile(inPath: string, outPath: string, options: Deriv
       },
     };
     await eachRecord(
-      flushing(chunks, () => {
+      flushing(fileChunks(inPath), () => {
         const text = block;
         block = '';
         return out.write(text);
@@ -97,7 +90,7 @@ export async function deriveFile(inPath: string, outPath: string, options: Deriv
     await out.finish();
   } catch (error) {
     await out.discard();
-    throw fileProblem(error, outPath, false);
+    throw error;
   }
   return { rows, rowsWithoutPosition: rows - placed, meanings, renamed, problems: source.problems };
 }
@@ -130,31 +123,4 @@ function freeName(name: string, taken: ReadonlySet<string>, renamed: { from: str
   if (!taken.has(name)) return name;
   renamed.push({ from: name, to: `${name}_input` });
   return `${name}_input`;
-}
-
-interface Writer {
-  write(text: string): Promise<void>;
-  finish(): Promise<void>;
-  discard(): Promise<void>;
-}
-
-/** A stream into a temporary sibling that takes the final name when it is finished. */
-async function temporaryWriter(path: string): Promise<Writer> {
-  const sibling = join(dirname(path), `.halosieve-${randomBytes(6).toString('hex')}-${basename(path)}`);
-  const stream = createWriteStream(sibling);
-  await withFile(path, false, () => once(stream, 'open').then(() => undefined));
-  return {
-    async write(text) {
-      if (text !== '' && !stream.write(text)) await once(stream, 'drain');
-    },
-    async finish() {
-      stream.end();
-      await once(stream, 'finish');
-      await rename(sibling, path);
-    },
-    async discard() {
-      stream.destroy();
-      await rm(sibling, { force: true });
-    },
-  };
 }
