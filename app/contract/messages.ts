@@ -47,7 +47,10 @@ export type Change =
 /** What a window may ask. Parameters and results are structured-cloneable; typed arrays travel as they are. */
 export interface Requests {
   'bench.view': { params: Record<string, never>; result: BenchView };
-  /** Opens a recipe, or a data file as the first source of a new bench. Refused when another process has it. */
+  /**
+   * Opens a recipe, a data file as the first source of a new bench, or the kept file of an unsaved bench. Refused when
+   * another process has it; the bench that was open then stays.
+   */
   'bench.open': { params: { path: string }; result: BenchView };
   /** A bench without sources; its recipe has no file until it is saved. */
   'bench.new': { params: Record<string, never>; result: BenchView };
@@ -105,6 +108,10 @@ export interface BenchView {
   readonly saved: boolean;
   /** True when unsaved work of an earlier run was brought back. */
   readonly restored: boolean;
+  /** File in which unsaved work is kept; opening that of a bench without a recipe file brings the bench back. */
+  readonly keptIn: string;
+  /** What the user must hear of the bench itself: unsaved work that was left, a recipe edited by another program. */
+  readonly notices: readonly WordedProblem[];
   readonly invented: boolean;
   /** Names of the next undo and redo steps, newest first. */
   readonly undo: readonly string[];

@@ -1,20 +1,21 @@
-import { basename, dirname, join, relative, resolve } from 'node:path';
+import { resolve } from 'node:path';
 import type { Recipe } from '../../core/edition/recipe';
-import { emptyRecipe, parseRecipe, recipeText } from '../../core/edition/recipefile';
-import type { Source } from '../../core/roster/sourcemap';
-import { fail } from '../../core/table/problem';
+import { recipeText } from '../../core/edition/recipefile';
+import { fail, type Problem } from '../../core/table/problem';
 import type { BenchView, Change, FreezeResult } from '../contract/messages';
-import { type Autosave, autosave, readAutosave } from './autosave';
-import { applyChange, freeId } from './changes';
-import { guessedMeanings } from './columnview';
+import { type Autosave, autosave } from './autosave';
+import { emptyStart, keptStart, recipeStart, refuseEdited, type Start } from './benchstart';
+import { applyChange } from './changes';
+import { sha256, writeWhole } from './files';
+import { advance, type History, mapRecipes, redo, undo } from './history';
 import type { EngineHost, Heard } from './host';
-import { readText, sha256, writeWhole } from './files';
-import { advance, begin, type History, redo, undo } from './history';
+import { leftBenches } from './leftbenches';
 import { type BenchLock, lockBench } from './lock';
-import { openSource, type Prepared, type PrepareOptions } from './pipeline';
+import type { Prepared, PrepareOptions } from './pipeline';
+import { newPlace, type Place, placeOfKept, recipePlace } from './place';
 import { type Session, sessionOf } from './session';
-import { benchKey } from './statefolder';
-import { benchView } from './views';
+import { bringsSource, rebased, sourceOfChange } from './sourceofchange';
+import { benchView, worded } from './views';
 
 type Freeze = (prepared: Prepared, folder: string, options: { now: string; version: string }) => Promise<FreezeResult>;
 
@@ -22,12 +23,13 @@ type Freeze = (prepared: Prepared, folder: string, options: { now: string; versi
 export class Bench {
   readonly #host: EngineHost;
   readonly #tell: Heard;
-  #history: History = begin(emptyRecipe('New sample'));
+  #history: History = emptyStart().history;
   #session: Session | undefined;
-  #recipePath: string | undefined;
-  /** Hash of the recipe file as it stands on disk. */
+  #place: Place;
+  /** Hash of the recipe file as it was read or written last. */
   #base: string | undefined;
   #restored = false;
+  #notices: readonly Problem[] = [];
   #revision = 0;
   #lastEdition: string | undefined;
   #lock: BenchLock | undefined;
@@ -37,6 +39,7 @@ export class Bench {
   constructor(host: EngineHost, tell: Heard) {
     this.#host = host;
     this.#tell = tell;
+    this.#place = newPlace(host.stateFolder);
   }
 
   /** The data of the bench; refused before one is open. */
@@ -46,31 +49,32 @@ export class Bench {
 
   /** Folder that paths of the recipe are relative to. */
   get folder(): string {
-    return this.#recipePath === undefined ? process.cwd() : dirname(this.#recipePath);
+    return this.#place.folder;
   }
 
-  /** Opens a recipe, or a data file as the first source of a new bench. */
+  /** Opens a recipe, a data file as the first source of a new bench, or the kept file of an unsaved bench. */
   async open(path: string): Promise<BenchView> {
     const full = resolve(path);
-    if (!full.endsWith('.json')) {
-      await this.create();
-      return this.change({ type: 'add-source', path: full });
+    const left = placeOfKept(this.#host.stateFolder, full);
+    if (left) return this.#begin(left, () => keptStart(left));
+    if (full.endsWith('.json')) {
+      const place = recipePlace(this.#host.stateFolder, full);
+      return this.#begin(place, () => recipeStart(place, full));
     }
-    const text = await readText(full);
-    const recipe = parseRecipe(text, basename(full));
-    await this.#begin(full, recipe, sha256(text));
-    return this.#show();
+    const place = newPlace(this.#host.stateFolder);
+    return this.#begin(place, () => this.#catalogueStart(place, full));
   }
 
   async create(): Promise<BenchView> {
-    await this.#begin(undefined, emptyRecipe('New sample'), undefined);
-    return this.#show();
+    return this.#begin(newPlace(this.#host.stateFolder), () => Promise.resolve(emptyStart()));
   }
 
   /** Applies a change; further ones of the same gesture join its step. */
   async change(change: Change, gesture?: string): Promise<BenchView> {
     const { recipe: before } = this.#history;
-    const source = await this.#sourceOf(change, before);
+    const source = bringsSource(change)
+      ? await this.#stoppable((options) => sourceOfChange(change, before, this.#place, options))
+      : undefined;
     const { roster } = this.session.prepared;
     const nameOf = (key: string): string => roster.names[roster.keys.indexOf(key)] ?? key;
     const { recipe, label } = applyChange(before, change, { now: this.#host.now(), nameOf, source });
@@ -85,17 +89,19 @@ export class Bench {
 
   /** Writes the recipe to its file or to another one, which is then its file. */
   async save(path: string | undefined): Promise<{ path: string }> {
-    const target =
-      path === undefined ? this.#recipePath : resolve(path.endsWith('.json') ? path : `${path}.halosieve.json`);
+    const own = this.#place.recipePath;
+    const target = path === undefined ? own : resolve(path.endsWith('.json') ? path : `${path}.halosieve.json`);
     if (target === undefined)
       fail('file-missing', { found: 'the bench has no recipe file yet', remedy: 'Choose where to save it.' });
-    const recipe = this.#rebased(target);
-    const text = recipeText(recipe);
-    await writeWhole(target, text);
-    const history = { ...this.#history, recipe };
-    if (target !== this.#recipePath) await this.#take(target);
-    this.#base = sha256(text);
-    await this.#become(history);
+    if (target === own) {
+      const text = recipeText(this.#history.recipe);
+      await refuseEdited(target, this.#base, text);
+      await writeWhole(target, text);
+      this.#base = sha256(text);
+    } else await this.#moveTo(recipePlace(this.#host.stateFolder, target), target);
+    this.#autosave?.keep(this.#history, this.#base);
+    await this.#autosave?.settled();
+    this.#notices = this.#notices.filter(({ code }) => code !== 'work-beside-edit');
     this.#show();
     return { path: target };
   }
@@ -103,8 +109,8 @@ export class Bench {
   /** Throws unsaved work away and goes back to the recipe's file. */
   async revert(): Promise<BenchView> {
     await this.#autosave?.forget();
-    const path = this.#recipePath;
-    return path === undefined ? this.create() : this.open(path);
+    const { recipePath } = this.#place;
+    return recipePath === undefined ? this.create() : this.open(recipePath);
   }
 
   /** Writes the next edition; refused while a source is not as the recipe says. */
@@ -146,45 +152,71 @@ export class Bench {
     const { past, future } = this.#history;
     return benchView(this.session, {
       revision: this.#revision,
-      recipePath: this.#recipePath,
+      recipePath: this.#place.recipePath,
       saved: this.#base !== undefined && sha256(recipeText(this.#history.recipe)) === this.#base,
       restored: this.#restored,
+      keptIn: this.#place.keptIn,
+      notices: this.#notices.map(worded),
       undo: past.map(({ label }) => label).reverse(),
       redo: future.map(({ label }) => label).reverse(),
       lastEdition: this.#lastEdition,
     });
   }
 
-  async #begin(path: string | undefined, recipe: Recipe, base: string | undefined): Promise<void> {
-    const lock = path === this.#recipePath ? this.#lock : undefined;
-    const taken = lock ?? lockBench(this.#statePath(path, 'lock'), path);
-    const kept = await readAutosave(this.#statePath(path, 'bench.json'));
-    const usable =
-      kept !== undefined && path !== undefined && kept.history.past.length + kept.history.future.length > 0;
-    const history = usable ? kept.history : begin(recipe);
+  /** Takes the lock of a place, makes what begins there, and only then leaves the bench that was open. */
+  async #begin(place: Place, start: () => Promise<Start>): Promise<BenchView> {
+    const same = place.keptIn === this.#place.keptIn ? this.#lock : undefined;
+    const lock = same ?? lockBench(place.lock, place.recipePath ?? place.keptIn);
+    let notice: Problem | undefined;
     try {
-      const session = await this.#read(history.recipe, path === undefined ? process.cwd() : dirname(path), undefined);
       await this.#autosave?.settled();
-      if (this.#lock !== taken) this.#lock?.release();
-      this.#session = session;
+      const begun = await start();
+      const { history, base, restored } = begun;
+      notice = begun.notice;
+      this.#session = await this.#read(history.recipe, place.folder, undefined);
+      [this.#place, this.#history, this.#base, this.#restored] = [place, history, base, restored];
     } catch (error) {
-      if (taken !== this.#lock) taken.release();
+      if (lock !== this.#lock) lock.release();
       throw error;
     }
-    [this.#lock, this.#recipePath, this.#base, this.#history] = [taken, path, base, history];
-    this.#restored = usable && recipeText(history.recipe) !== recipeText(recipe);
+    if (lock !== this.#lock) this.#lock?.release();
+    this.#lock = lock;
     this.#lastEdition = undefined;
-    this.#autosave = this.#newAutosave(path);
+    this.#autosave = this.#newAutosave(place);
+    if (this.#history.past.length > 0) this.#autosave.keep(this.#history, this.#base);
+    this.#notices = [...(notice ? [notice] : []), ...(await leftBenches(this.#host.stateFolder, place.keptIn))];
+    return this.#show();
   }
 
-  /** Moves lock and autosave to another recipe file. */
-  async #take(path: string): Promise<void> {
-    const lock = lockBench(this.#statePath(path, 'lock'), path);
+  async #catalogueStart(place: Place, path: string): Promise<Start> {
+    const { history } = emptyStart();
+    const change = { type: 'add-source', path } as const;
+    const source = await this.#stoppable((options) => sourceOfChange(change, history.recipe, place, options));
+    const { recipe, label } = applyChange(history.recipe, change, {
+      now: this.#host.now(),
+      nameOf: (key) => key,
+      source,
+    });
+    return { history: advance(history, recipe, label), base: undefined, restored: false };
+  }
+
+  /** Writes the recipe to another file and moves there with lock, history and autosave; all of it or nothing. */
+  async #moveTo(place: Place, path: string): Promise<void> {
+    const history = mapRecipes(this.#history, (recipe) => rebased(recipe, this.folder, place.folder));
+    const text = recipeText(history.recipe);
+    const lock = lockBench(place.lock, path);
+    try {
+      const session = await this.#read(history.recipe, place.folder, this.#session);
+      await writeWhole(path, text);
+      this.#session = session;
+    } catch (error) {
+      lock.release();
+      throw error;
+    }
     await this.#autosave?.forget();
     this.#lock?.release();
-    this.#lock = lock;
-    this.#recipePath = path;
-    this.#autosave = this.#newAutosave(path);
+    [this.#place, this.#history, this.#base, this.#lock] = [place, history, sha256(text), lock];
+    this.#autosave = this.#newAutosave(place);
   }
 
   async #become(history: History): Promise<void> {
@@ -208,56 +240,13 @@ export class Bench {
     }
   }
 
-  /** Reads the file of a change that brings a source. */
-  async #sourceOf(change: Change, recipe: Recipe): Promise<Source | undefined> {
-    if (change.type === 'accept-source') {
-      const source =
-        recipe.sources.find(({ id }) => id === change.source) ?? fail('unknown-quantity', { found: change.source });
-      const file = await this.#stoppable((options) => openSource(source, this.folder, options));
-      return { ...source, sha256: file.sha256 };
-    }
-    if (change.type !== 'add-source') return undefined;
-    const full = resolve(this.folder, change.path);
-    const bare = {
-      id: freeId(sourceId(full), recipe.sources),
-      path: this.#pathFor(full),
-      sha256: '0'.repeat(64),
-      title: basename(full),
-    };
-    const source: Source = { ...bare, citation: '', invented: false, missing: [], columns: [] };
-    const { file, sha256: hash } = await this.#stoppable((options) => openSource(source, this.folder, options));
-    const invented = file.comments.some((line) => /\binvented data\b/i.test(line));
-    return { ...source, invented, sha256: hash, columns: guessedMeanings(file.table) };
-  }
-
-  /** A path as a recipe writes it: relative to the recipe when there is one, with forward slashes. */
-  #pathFor(full: string): string {
-    return this.#recipePath === undefined ? full : portable(relative(this.folder, full));
-  }
-
-  /** The recipe with source paths relative to where it will stand. */
-  #rebased(target: string): Recipe {
-    const { recipe } = this.#history;
-    if (target === this.#recipePath) return recipe;
-    const sources = recipe.sources.map((source) => ({
-      ...source,
-      path: portable(relative(dirname(target), resolve(this.folder, source.path))),
-    }));
-    return { ...recipe, sources };
-  }
-
-  #newAutosave(path: string | undefined): Autosave {
-    return autosave(this.#statePath(path, 'bench.json'), () =>
+  #newAutosave({ keptIn }: Place): Autosave {
+    return autosave(keptIn, () =>
       this.#tell('progress', {
         label: 'Unsaved work cannot be kept: the state folder cannot be written',
         share: undefined,
       }),
     );
-  }
-
-  #statePath(path: string | undefined, ending: string): string {
-    const key = path === undefined ? `${benchKey(undefined)}-${process.pid}` : benchKey(path);
-    return join(this.#host.stateFolder, `${key}.${ending}`);
   }
 
   #show(): BenchView {
@@ -266,17 +255,4 @@ export class Bench {
     this.#tell('bench', view);
     return view;
   }
-}
-
-function portable(path: string): string {
-  return path.replaceAll('\\', '/');
-}
-
-function sourceId(path: string): string {
-  const stem = basename(path)
-    .replace(/\..*$/, '')
-    .toLowerCase()
-    .replace(/[^a-z0-9]+/g, '-')
-    .replace(/^-+|-+$/g, '');
-  return /^[a-z]/.test(stem) ? stem : `source-${stem}`.replace(/-$/, '');
 }

@@ -1,4 +1,3 @@
-import { createReadStream } from 'node:fs';
 import { stat } from 'node:fs/promises';
 import { basename } from 'node:path';
 import { eachRecord } from '../../core/formats/csv/records';
@@ -12,9 +11,8 @@ import { fail, type Problem } from '../../core/table/problem';
 import type { Progress } from '../contract/messages';
 import { guessedMeanings } from './columnview';
 import { DERIVED_NAMES, derivedRows } from './derivedrows';
-import { withFile } from './files';
+import { fileChunks, wholeFile, withFile } from './files';
 import { readSourceFile } from './sourcefile';
-import { wholeFile } from './wholefile';
 
 export interface DeriveFileOptions {
   readonly frame: SolarFrame;
@@ -36,9 +34,6 @@ export interface DeriveSummary {
   readonly renamed: readonly { readonly from: string; readonly to: string }[];
   readonly problems: readonly Problem[];
 }
-
-/** Bytes read at once. */
-const CHUNK = 1 << 20;
 
 /**
  * Writes a table's own cells, as they stand, and behind them every derived quantity with its error: one row per input
@@ -62,7 +57,7 @@ export async function deriveFile(inPath: string, outPath: string, options: Deriv
   const renamed: { from: string; to: string }[] = [];
 
   const out = await wholeFile(outPath);
-  const text = new RowBytes(2 * CHUNK);
+  const text = new RowBytes(1 << 21);
   let [rows, placed] = [0, 0];
   try {
     const sink = {
@@ -80,9 +75,8 @@ export async function deriveFile(inPath: string, outPath: string, options: Deriv
         if (known) placed++;
       },
     };
-    const chunks = createReadStream(inPath, { highWaterMark: CHUNK });
     await eachRecord(
-      flushing(chunks, () => out.write(text.take())),
+      flushing(fileChunks(inPath), () => out.write(text.take())),
       { fileName, onBytes: progress(`Writing ${basename(outPath)}`) },
       sink,
     );

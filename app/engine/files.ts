@@ -19,7 +19,8 @@ export function fileProblem(error: unknown, path: string, reading: boolean): unk
   const code = (error as NodeJS.ErrnoException | undefined)?.code;
   if (code === undefined || error instanceof ProblemError) return error;
   const known = reading && (code === 'EACCES' || code === 'EPERM') ? 'file-unreadable' : CODES[code];
-  return new ProblemError([{ code: known ?? 'file-unreadable', severity: 'error', where: path, found: code }]);
+  const otherwise = reading ? 'file-unreadable' : 'folder-read-only';
+  return new ProblemError([{ code: known ?? otherwise, severity: 'error', where: path, found: code }]);
 }
 
 /** Runs a piece of file work and words what the file system refuses. */
@@ -38,18 +39,22 @@ export interface HashedStream {
   digest(): string;
 }
 
+/** A file's bytes in chunks. */
+export async function* fileChunks(path: string): AsyncGenerator<Uint8Array> {
+  try {
+    for await (const chunk of createReadStream(path, { highWaterMark: 1 << 20 })) yield chunk as Buffer;
+  } catch (error) {
+    throw fileProblem(error, path, true);
+  }
+}
+
 /** Opens a file for one pass that reads and hashes. */
 export function hashedStream(path: string): HashedStream {
   const hash = createHash('sha256');
   async function* chunks(): AsyncGenerator<Uint8Array> {
-    try {
-      for await (const chunk of createReadStream(path, { highWaterMark: 1 << 20 })) {
-        const bytes = chunk as Buffer;
-        hash.update(bytes);
-        yield bytes;
-      }
-    } catch (error) {
-      throw fileProblem(error, path, true);
+    for await (const bytes of fileChunks(path)) {
+      hash.update(bytes);
+      yield bytes;
     }
   }
   return { chunks: chunks(), digest: () => hash.digest('hex') };
@@ -65,19 +70,46 @@ export function readText(path: string): Promise<string> {
   return withFile(path, true, () => readFile(path, 'utf8'));
 }
 
-/** Writes a file whole or not at all: a temporary sibling, flushed, then renamed. Missing folders are made. */
-export async function writeWhole(path: string, data: string | Uint8Array): Promise<void> {
+/** A file that is written piece by piece and appears whole, or not at all. */
+export interface WholeFile {
+  write(data: string | Uint8Array): Promise<void>;
+  /** Flushes it to the disk and gives it its name; what had the name before is there until then. */
+  finish(): Promise<void>;
+  /** Leaves nothing behind; does nothing to a file that is finished. */
+  discard(): Promise<void>;
+}
+
+/** Begins a file as a temporary sibling. Errors of every step: folder-read-only, disk-full, file-missing; they name `path`. */
+export async function wholeFile(path: string): Promise<WholeFile> {
   const sibling = join(dirname(path), `.halosieve-${randomBytes(6).toString('hex')}-${basename(path)}`);
-  await withFile(path, false, async () => {
-    await mkdir(dirname(path), { recursive: true });
-    try {
-      await writeFlushed(sibling, data);
-      await rename(sibling, path);
-    } catch (error) {
+  const file = await withFile(path, false, () => open(sibling, 'wx'));
+  return {
+    write: (data) => withFile(path, false, () => file.writeFile(data)),
+    finish: () =>
+      withFile(path, false, async () => {
+        await file.sync();
+        await file.close();
+        await rename(sibling, path);
+      }),
+    async discard() {
+      // On a full disk closing may fail once more; the sibling goes in any case.
+      await file.close().catch(() => undefined);
       await rm(sibling, { force: true });
-      throw error;
-    }
-  });
+    },
+  };
+}
+
+/** Writes a file whole or not at all. Missing folders are made. */
+export async function writeWhole(path: string, data: string | Uint8Array): Promise<void> {
+  await withFile(path, false, () => mkdir(dirname(path), { recursive: true }));
+  const file = await wholeFile(path);
+  try {
+    await file.write(data);
+    await file.finish();
+  } catch (error) {
+    await file.discard();
+    throw error;
+  }
 }
 
 /** Writes a file and waits until it is on the disk. */

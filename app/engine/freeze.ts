@@ -1,15 +1,13 @@
 import { mkdir, open, rename, rm } from 'node:fs/promises';
 import { basename, join, resolve } from 'node:path';
-import { randomBytes } from 'node:crypto';
 import { judgeLedger } from '../../core/cuts/ledger';
 import { assembleEdition, type EditionFile, type EditionInput } from '../../core/edition/assemble';
 import { sumsText } from '../../core/edition/sums';
 import { type Problem, ProblemError, fail } from '../../core/table/problem';
 import type { FreezeResult } from '../contract/messages';
 import { sha256, withFile, writeFlushed } from './files';
-import { processRuns } from './lock';
 import type { Prepared } from './pipeline';
-import { nextNumber, noteSources, sweep } from './shelf';
+import { nextNumber, noteSources, sweep, temporaryName } from './shelf';
 
 /** Time and program that an edition states. */
 export interface EditionStamp {
@@ -31,11 +29,10 @@ export async function freeze(
   const path = resolve(folder);
   return withFile(path, false, async () => {
     await mkdir(path, { recursive: true });
-    await sweep(path, processRuns);
-    const temporary = join(path, `.halosieve-freeze-${process.pid}-${randomBytes(6).toString('hex')}`);
+    await sweep(path);
+    const temporary = join(path, temporaryName());
     try {
       const number = await writeNext(prepared, path, temporary, options);
-      await noteSources(path, new Map([...prepared.files.values()].map((file) => [file.sha256, file.path])));
       const { counts } = judged(prepared);
       return {
         folder: join(path, `edition-${number}`),
@@ -84,6 +81,8 @@ async function writeNext(
     await mkdir(temporary);
     const program = { version, node: process.versions.node };
     await writeAll(temporary, editionFiles(prepared, { number, time: now, program }));
+    // Before the rename, which comes last: when either fails, there is no edition.
+    await noteSources(folder, new Map([...prepared.files.values()].map((file) => [file.sha256, file.path])));
     try {
       await rename(temporary, join(folder, `edition-${number}`));
       return number;

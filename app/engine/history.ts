@@ -29,6 +29,12 @@ export function advance(history: History, recipe: Recipe, label: string, gesture
   return { past: [...history.past, { recipe: history.recipe, label }].slice(-DEPTH), recipe, future: [], gesture };
 }
 
+/** The history with every recipe of it changed, e.g. because its file moves to another folder. */
+export function mapRecipes(history: History, change: (recipe: Recipe) => Recipe): History {
+  const each = (steps: readonly Step[]): Step[] => steps.map((step) => ({ ...step, recipe: change(step.recipe) }));
+  return { past: each(history.past), recipe: change(history.recipe), future: each(history.future) };
+}
+
 /** One step back; the same history when there is none. */
 export function undo({ past, recipe, future }: History): History {
   const step = past.at(-1);

@@ -29,6 +29,12 @@ export function lockBench(path: string, recipePath: string | undefined): BenchLo
   }
 }
 
+/** Whether another program that runs has the lock. */
+export function isHeld(path: string): boolean {
+  const holder = holderOf(path);
+  return holder !== undefined && processRuns(holder);
+}
+
 function holderOf(path: string): number | undefined {
   try {
     const pid = Number(readFileSync(path, 'utf8'));

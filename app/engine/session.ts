@@ -1,3 +1,4 @@
+import { resolve } from 'node:path';
 import type { OutcomeCache } from '../../core/cuts/outcomecache';
 import { outcomeCache } from '../../core/cuts/outcomecache';
 import { judgeLedger } from '../../core/cuts/ledger';
@@ -31,8 +32,8 @@ export interface Session {
 }
 
 /** What a reading of a source hangs on. */
-function readingKey(source: Source): string {
-  return JSON.stringify([source.path, source.missing]);
+function readingKey(source: Source, folder: string): string {
+  return JSON.stringify([resolve(folder, source.path), source.missing]);
 }
 
 /** What roster and quantities hang on, beside the bytes of the sources. */
@@ -81,8 +82,7 @@ async function stateOf(
   options: PrepareOptions,
 ): Promise<SourceState> {
   const old = before?.recipe.sources.find(({ id }) => id === source.id);
-  const same =
-    old !== undefined && before !== undefined && before.folder === folder && readingKey(old) === readingKey(source);
+  const same = old && before && readingKey(old, before.folder) === readingKey(source, folder);
   const known = same ? before.sources.get(source.id)?.file : undefined;
   if (known) return withState(source, known);
   try {

@@ -1,7 +1,10 @@
+import { randomBytes } from 'node:crypto';
 import { access, readdir, rm } from 'node:fs/promises';
+import { hostname } from 'node:os';
 import { basename, dirname, join, relative, resolve } from 'node:path';
 import { z } from 'zod';
-import { readText, writeWhole } from './files';
+import { readText, sha256, writeWhole } from './files';
+import { processRuns } from './lock';
 
 const shelfSchema = z.object({
   halosieve: z.literal('shelf'),
@@ -23,12 +26,27 @@ export async function nextNumber(folder: string): Promise<number> {
   return Math.max(0, ...numbers) + 1;
 }
 
-/** Removes what a freeze that was killed left behind; `halosieve-<pid>-…` of running processes stay. */
-export async function sweep(folder: string, running: (pid: number) => boolean): Promise<void> {
+const TEMPORARY = '.halosieve-freeze-';
+
+/** A name, never given twice, for the folder that a freeze of this program writes into. */
+export function temporaryName(): string {
+  return `${TEMPORARY}${machine()}-${process.pid}-${randomBytes(6).toString('hex')}`;
+}
+
+/**
+ * Removes what a freeze that was killed left behind. What this program, another one that runs, or another machine
+ * writes stays: a shared disk shows folders whose process this machine cannot know.
+ */
+export async function sweep(folder: string): Promise<void> {
   for (const name of await readdir(folder)) {
-    const pid = /^\.halosieve-freeze-(\d+)-/.exec(name)?.[1];
-    if (pid !== undefined && !running(Number(pid))) await rm(join(folder, name), { recursive: true, force: true });
+    const [from, pid] = name.startsWith(TEMPORARY) ? name.slice(TEMPORARY.length).split('-') : [];
+    if (from !== machine() || Number(pid) === process.pid || processRuns(Number(pid))) continue;
+    await rm(join(folder, name), { recursive: true, force: true });
   }
+}
+
+function machine(): string {
+  return sha256(hostname()).slice(0, 8);
 }
 
 /** Notes beside the editions where their sources stand, so that verify finds them; never part of an edition. */

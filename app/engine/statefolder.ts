@@ -1,6 +1,5 @@
 import { homedir } from 'node:os';
 import { join } from 'node:path';
-import { sha256 } from './files';
 
 /** Where the program keeps unsaved work, by the custom of the system. */
 export function defaultStateFolder(env: NodeJS.ProcessEnv = process.env, platform: string = process.platform): string {
@@ -8,9 +7,4 @@ export function defaultStateFolder(env: NodeJS.ProcessEnv = process.env, platfor
   if (platform === 'win32') return join(env['LOCALAPPDATA'] ?? join(homedir(), 'AppData', 'Local'), 'Halosieve');
   if (platform === 'darwin') return join(homedir(), 'Library', 'Application Support', 'Halosieve');
   return join(homedir(), '.local', 'state', 'halosieve');
-}
-
-/** Name under which a bench stands in the state folder: one per recipe path. */
-export function benchKey(recipePath: string | undefined): string {
-  return recipePath === undefined ? 'new' : sha256(recipePath).slice(0, 16);
 }

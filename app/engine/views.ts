@@ -21,7 +21,7 @@ const NAMES_UP_TO = 50_000;
 /** What of a view does not follow from the session. */
 export type BenchFacts = Pick<
   BenchView,
-  'revision' | 'recipePath' | 'saved' | 'restored' | 'undo' | 'redo' | 'lastEdition'
+  'revision' | 'recipePath' | 'saved' | 'restored' | 'keptIn' | 'notices' | 'undo' | 'redo' | 'lastEdition'
 >;
 
 /** The bench as a window draws it. */

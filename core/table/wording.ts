@@ -143,6 +143,18 @@ const WORDINGS: Readonly<Record<ProblemCode, Wording>> = {
     says: (p) => `another Halosieve has this bench open (process ${or(p.found, 'unknown')})`,
     remedy: 'Use that window, or close it first.',
   },
+  'unsaved-left': {
+    says: (p) => `unsaved work of an earlier bench is kept here: ${or(p.found, 'a bench')}`,
+    remedy: 'Open this file to go on with it; it stays until the bench is saved or reverted.',
+  },
+  'recipe-edited': {
+    says: () => 'another program edited the recipe since it was opened here; it was not written over',
+    remedy: 'Save under another name, or open the file again: it then stands as a step beside your work.',
+  },
+  'work-beside-edit': {
+    says: () => 'another program edited the recipe while unsaved work on it was kept; the edited file is shown',
+    remedy: 'Undo brings the unsaved work back and redo the file; saving keeps what is shown then.',
+  },
   'rationale-missing': {
     says: (p) => `${or(p.found, 'a cut')} is switched on without a rationale`,
     remedy: 'Write why the cut stands where it stands, or switch it off.',
