@@ -4,9 +4,11 @@ import { mkdir, open, readFile, rename, rm } from 'node:fs/promises';
 import { basename, dirname, join } from 'node:path';
 import { ProblemError, type ProblemCode } from '../../core/table/problem';
 
-const CODES: Readonly<Record<string, ProblemCode>> = {
-  ENOENT: 'file-missing',
-  ENOTDIR: 'file-missing',
+const READING: Readonly<Record<string, ProblemCode>> = { ENOENT: 'file-missing', ENOTDIR: 'file-missing' };
+const WRITING: Readonly<Record<string, ProblemCode>> = {
+  ENOENT: 'folder-missing',
+  ENOTDIR: 'folder-missing',
+  EEXIST: 'folder-missing',
   EACCES: 'folder-read-only',
   EPERM: 'folder-read-only',
   EROFS: 'folder-read-only',
@@ -14,13 +16,22 @@ const CODES: Readonly<Record<string, ProblemCode>> = {
   EDQUOT: 'disk-full',
 };
 
+const REASONS: Readonly<Record<string, string>> = {
+  ENOENT: 'it does not exist',
+  ENOTDIR: 'a part of the path is a file',
+  EEXIST: 'a file has its name',
+  EISDIR: 'it is a folder',
+  EACCES: 'no permission',
+  EPERM: 'no permission',
+  EROFS: 'the file system is read-only',
+};
+
 /** Turns a failure of the file system into a problem that names the path; anything else stays what it is. */
 export function fileProblem(error: unknown, path: string, reading: boolean): unknown {
   const code = (error as NodeJS.ErrnoException | undefined)?.code;
   if (code === undefined || error instanceof ProblemError) return error;
-  const known = reading && (code === 'EACCES' || code === 'EPERM') ? 'file-unreadable' : CODES[code];
-  const otherwise = reading ? 'file-unreadable' : 'folder-read-only';
-  return new ProblemError([{ code: known ?? otherwise, severity: 'error', where: path, found: code }]);
+  const known = reading ? (READING[code] ?? 'file-unreadable') : (WRITING[code] ?? 'folder-read-only');
+  return new ProblemError([{ code: known, severity: 'error', where: path, found: REASONS[code] ?? code }]);
 }
 
 /** Runs a piece of file work and words what the file system refuses. */
@@ -79,7 +90,7 @@ export interface WholeFile {
   discard(): Promise<void>;
 }
 
-/** Begins a file as a temporary sibling. Errors of every step: folder-read-only, disk-full, file-missing; they name `path`. */
+/** Begins a file as a temporary sibling. Errors of every step: folder-read-only, folder-missing, disk-full; they name `path`. */
 export async function wholeFile(path: string): Promise<WholeFile> {
   const sibling = join(dirname(path), `.halosieve-${randomBytes(6).toString('hex')}-${basename(path)}`);
   const file = await withFile(path, false, () => open(sibling, 'wx'));

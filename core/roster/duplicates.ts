@@ -26,7 +26,7 @@ export function withoutDuplicates(source: ReadSource, keys: readonly string[]): 
   const problems = duplicates.map(({ line, name, firstLine }): Problem => ({
     code: 'duplicate-name',
     severity: 'warning',
-    where: source.id,
+    where: source.fileName,
     line,
     found: name,
     expected: `line ${firstLine}`,

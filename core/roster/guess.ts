@@ -180,15 +180,17 @@ function proposeNumber(
   const candidates = stated === undefined ? (COMMON_UNITS[definition.dimension] ?? ['']) : [stated];
   const fits = candidates.map((unit) => ({
     unit,
-    share: shareWithin(column.values, unitFactor(unit, definition.dimension), min, max),
+    ...shareWithin(column.values, unitFactor(unit, definition.dimension), min, max),
   }));
-  const chosen = fits.find(({ share }) => share > 0.98) ?? fits[0]!;
+  // One stray value is an error of the table, not a sign of another unit.
+  const chosen = fits.find(({ share, outside }) => share > 0.98 || (share > 0.5 && outside === 1)) ?? fits[0]!;
   if (chosen.share < 0.5) return nothing(`the name fits ${definition.label}, but not its values`);
   const words = ['by its name'];
   if (stated !== undefined) words.push('and its unit');
   else if (chosen.unit !== definition.unit && definition.dimension !== 'dex')
     words.push(`and its values, which fit ${chosen.unit}`);
   else if (definition.unit !== '') words.push(`with values that fit ${chosen.unit}`);
+  if (chosen.outside > 0) words.push(`(${chosen.outside} cannot be)`);
   if (id === 'parallax') words.push('(an inverted parallax is a biased distance)');
   return {
     column: column.name,
@@ -202,14 +204,21 @@ function proposeNumber(
   };
 }
 
-function shareWithin(values: Float64Array, factor: number | undefined, min: number, max: number): number {
-  if (factor === undefined) return 0;
+/** Which share of the values lies within limits, and how many do not. */
+function shareWithin(
+  values: Float64Array,
+  factor: number | undefined,
+  min: number,
+  max: number,
+): { share: number; outside: number } {
+  if (factor === undefined) return { share: 0, outside: 0 };
   let [present, within] = [0, 0];
-  for (const value of values) {
+  for (let row = 0; row < values.length; row++) {
+    const value = values[row]!;
     if (Number.isNaN(value)) continue;
     present++;
     const converted = value * factor;
     if (converted >= min && converted <= max) within++;
   }
-  return present === 0 ? 0 : within / present;
+  return { share: present === 0 ? 0 : within / present, outside: present - within };
 }

@@ -106,7 +106,7 @@ function farProblem(far: FarNamesake, objects: readonly Identity[], sources: rea
   return {
     code: 'far-namesake',
     severity: 'warning',
-    where: source.id,
+    where: source.fileName,
     line: source.lines[object.rows[far.second]!]!,
     found: object.name,
     expected: `${far.separationDeg.toFixed(4)}°`,

@@ -100,7 +100,7 @@ function byText(a: string, b: string): number {
 }
 
 function ambiguous(source: ReadSource, row: number, found: string): Problem {
-  return { code: 'ambiguous-match', severity: 'warning', where: source.id, line: source.lines[row]!, found };
+  return { code: 'ambiguous-match', severity: 'warning', where: source.fileName, line: source.lines[row]!, found };
 }
 
 /** Objects stand where the most trusted source that has them puts them. */

@@ -6,6 +6,8 @@ import type { MeasuredId } from '../table/role';
 /** A source read and understood: one row per readable row of the file. */
 export interface ReadSource {
   readonly id: string;
+  /** The bare name of its file, for what is said of it. */
+  readonly fileName: string;
   readonly names: readonly string[];
   readonly measured: MeasuredTable;
   readonly extras: readonly NumberColumn[];

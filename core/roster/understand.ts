@@ -32,6 +32,7 @@ export function understandSource(id: string, file: DelimitedFile, meanings: read
   const pick = picker(kept, file.table.rows);
   return {
     id,
+    fileName: file.fileName,
     names: namesOf(assigned.get('name'), kept),
     measured: { rows: kept.length, columns: mapColumns(columns, pick) },
     extras: extras.map(({ column }) => extraColumn(id, column as NumberColumn, pick)),

@@ -25,6 +25,7 @@ export type ProblemCode =
   | 'too-large'
   | 'file-missing'
   | 'file-unreadable'
+  | 'folder-missing'
   | 'folder-read-only'
   | 'disk-full'
   | 'source-changed'

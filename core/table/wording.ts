@@ -114,6 +114,10 @@ const WORDINGS: Readonly<Record<ProblemCode, Wording>> = {
     says: (p) => `the file cannot be read (${or(p.found, 'unknown reason')})`,
     remedy: 'Check that it is a file and that you may read it.',
   },
+  'folder-missing': {
+    says: (p) => `there is no folder to write it to (${or(p.found, 'it does not exist')})`,
+    remedy: 'Make the folder, or choose another one.',
+  },
   'folder-read-only': {
     says: (p) => `nothing can be written here (${or(p.found, 'no permission')})`,
     remedy: 'Choose a folder that you may write to.',

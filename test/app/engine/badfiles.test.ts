@@ -9,7 +9,7 @@ it.each([
   ['empty.csv', '', /empty\.csv: the file has no rows/],
   ['prose.csv', 'This is no table\nat all\n', /prose\.csv.*no table can be read here/],
   ['picture.csv', '\u0000\u0001\u0002\u0000', /picture\.csv: this is not a text table/],
-  ['folder.csv', undefined, /folder\.csv: the file cannot be read \(EISDIR\)/],
+  ['folder.csv', undefined, /folder\.csv: the file cannot be read \(it is a folder\)/],
   ['absent.csv', null, /absent\.csv: there is no such file/],
   ['recipe.json', '{ "halosieve": "recipe", ', /recipe\.json.*this is not JSON/],
   ['other.json', '{}', /other\.json: the recipe does not fit/],

@@ -44,9 +44,9 @@ it.for([
 );
 
 it.each([
-  ['absent/out.csv', /absent\/out\.csv: there is no such file/],
-  ['in.csv/out.csv', /in\.csv\/out\.csv: there is no such file/],
-  ['taken', /taken: nothing can be written here \(EISDIR\)/],
+  ['absent/out.csv', /absent\/out\.csv: there is no folder to write it to/],
+  ['in.csv/out.csv', /in\.csv\/out\.csv: there is no folder to write it to/],
+  ['taken', /taken: nothing can be written here \(it is a folder\)/],
 ])('the output %s, which cannot be, is refused by its name, and nothing is left behind', async (name, words) => {
   mkdirSync(join(folder, 'taken'));
   const before = readdirSync(folder);

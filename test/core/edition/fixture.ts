@@ -28,6 +28,7 @@ export function source(
   }
   return {
     id,
+    fileName: `${id}.csv`,
     names,
     measured: { rows: names.length, columns: measured },
     extras: Object.entries(more.extras ?? {}).map(([name, values]) =>

@@ -92,7 +92,7 @@ test('namesakes further apart than the radius are one object, listed as a confli
   const [conflict] = roster.conflicts;
   expect([conflict?.quantity, conflict?.chosen.source, conflict?.other.source]).toEqual(['position', 'a', 'b']);
   expect(conflict?.other.sigma).toBeCloseTo(0.5, 10);
-  expect(roster.problems).toMatchObject([{ code: 'far-namesake', where: 'b', line: 7, found: 'One' }]);
+  expect(roster.problems).toMatchObject([{ code: 'far-namesake', where: 'b.csv', line: 7, found: 'One' }]);
 });
 
 test('of several objects within the radius the nearest is taken, and the row is listed as ambiguous', () => {
@@ -102,7 +102,7 @@ test('of several objects within the radius the nearest is taken, and the row is 
   ]);
   const roster = mergeSources([near, readSource('b', [{ name: 'Uno', dec: 20 + 12 * arcsec, line: 5 }])], policy());
   expect([...roster.lines[1]!]).toEqual([0, 5]);
-  expect(roster.problems).toMatchObject([{ code: 'ambiguous-match', where: 'b', line: 5, found: 'Uno' }]);
+  expect(roster.problems).toMatchObject([{ code: 'ambiguous-match', where: 'b.csv', line: 5, found: 'Uno' }]);
 });
 
 test('of two rows near one object the closer gets it; the other is an object of its own and is listed', () => {
@@ -113,7 +113,7 @@ test('of two rows near one object the closer gets it; the other is an object of 
   const roster = mergeSources([readSource('a', [{ name: 'One' }]), readSource('b', rows)], policy());
   expect(roster.names).toEqual(['One', 'Uno']);
   expect([...roster.lines[1]!]).toEqual([6, 5]);
-  expect(roster.problems).toMatchObject([{ code: 'ambiguous-match', where: 'b', line: 5, found: 'One' }]);
+  expect(roster.problems).toMatchObject([{ code: 'ambiguous-match', where: 'b.csv', line: 5, found: 'One' }]);
 });
 
 test('a match by name goes before a closer one by place', () => {

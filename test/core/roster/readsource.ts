@@ -24,6 +24,7 @@ export function readSource(id: string, rows: readonly Row[], quarantined = 0): R
   const snr = Float64Array.from(rows, (row) => row.snr ?? Number.NaN);
   return {
     id,
+    fileName: `${id}.csv`,
     names: rows.map(({ name }) => name ?? ''),
     measured: { rows: rows.length, columns },
     extras: snr.every(Number.isNaN) ? [] : [numberColumn(`${id}.snr`, snr)],
