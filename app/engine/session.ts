@@ -43,13 +43,14 @@ function rosterKey({ sources, roster, frame, extinction }: Recipe): string {
 
 /**
  * The session of a recipe, made from the one before with as little work as the difference asks for: a moved limit
- * judges one cut, a new frame derives anew, only a new or changed source is read.
+ * judges one cut, a new frame derives anew, only a new or changed source is read. It bears `version` unless objects and
+ * quantities are those of the one before.
  */
 export async function sessionOf(
   recipe: Recipe,
   folder: string,
   before: Session | undefined,
-  options: PrepareOptions,
+  options: PrepareOptions & { readonly version: number },
 ): Promise<Session> {
   const cache = before?.cache ?? outcomeCache();
   if (before && before.folder === folder && rosterKey(before.recipe) === rosterKey(recipe)) {
@@ -66,7 +67,7 @@ export async function sessionOf(
     sources,
     prepared,
     result: judge(recipe, prepared, cache),
-    version: (before?.version ?? 0) + 1,
+    version: options.version,
     cache,
   };
 }
