@@ -60,7 +60,7 @@ export function seatWindow(engine: Served, send: (packet: Packet) => void, bug: 
         (result) => say({ type: 'answer', id, result }),
         (error: unknown) => {
           if (!(error instanceof ProblemError)) bug(error);
-          refuse(id, error instanceof ProblemError ? worded(error.problems) : [internal(error)]);
+          refuse(id, worded(error instanceof ProblemError ? error.problems : [faultOf(error)]));
         },
       );
       return true;
@@ -81,11 +81,7 @@ function worded(problems: readonly Problem[]): WordedProblem[] {
   return problems.map((problem) => ({ ...problem, text: problemText(problem) }));
 }
 
-function internal(error: unknown): WordedProblem {
-  const first = (error instanceof Error ? error.message : String(error)).split('\n')[0]!;
-  return {
-    code: 'cancelled',
-    severity: 'error',
-    text: `The program failed: ${first}. Your work is kept; please report this.`,
-  };
+function faultOf(error: unknown): Problem {
+  const found = (error instanceof Error ? error.message : String(error)).split('\n')[0]!;
+  return { code: 'program-fault', severity: 'error', found };
 }

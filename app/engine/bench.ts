@@ -30,7 +30,9 @@ export class Bench {
   #base: string | undefined;
   #restored = false;
   #notices: readonly Problem[] = [];
-  #revision = 0;
+  #revision: number;
+  /** The greatest version that a session has had; never given twice, also where one bench follows another. */
+  #version: number;
   #lastEdition: string | undefined;
   #lock: BenchLock | undefined;
   #autosave: Autosave | undefined;
@@ -40,6 +42,8 @@ export class Bench {
     this.#host = host;
     this.#tell = tell;
     this.#place = newPlace(host.stateFolder);
+    this.#revision = host.shown?.revision ?? 0;
+    this.#version = host.shown?.version ?? 0;
   }
 
   /** The data of the bench; refused before one is open. */
@@ -226,7 +230,8 @@ export class Bench {
   }
 
   async #read(recipe: Recipe, folder: string, before: Session | undefined): Promise<Session> {
-    return this.#stoppable((options) => sessionOf(recipe, folder, before, options));
+    const version = ++this.#version;
+    return this.#stoppable((options) => sessionOf(recipe, folder, before, { ...options, version }));
   }
 
   async #stoppable<T>(work: (options: PrepareOptions) => Promise<T>): Promise<T> {

@@ -43,13 +43,14 @@ function rosterKey({ sources, roster, frame, extinction }: Recipe): string {
 
 /**
  * The session of a recipe, made from the one before with as little work as the difference asks for: a moved limit
- * judges one cut, a new frame derives anew, only a new or changed source is read.
+ * judges one cut, a new frame derives anew, only a new or changed source is read. It bears `version` unless objects and
+ * quantities are those of the one before.
  */
 export async function sessionOf(
   recipe: Recipe,
   folder: string,
   before: Session | undefined,
-  options: PrepareOptions,
+  options: PrepareOptions & { readonly version: number },
 ): Promise<Session> {
   const cache = before?.cache ?? outcomeCache();
   if (before && before.folder === folder && rosterKey(before.recipe) === rosterKey(recipe)) {
@@ -59,14 +60,14 @@ export async function sessionOf(
   for (const source of recipe.sources) sources.set(source.id, await stateOf(source, folder, before, options));
   const files = new Map<string, SourceFile>();
   for (const [id, { state, file }] of sources) if (state === 'read' && file) files.set(id, file);
-  const prepared = assemble(recipe, folder, files);
+  const prepared = await assemble(recipe, folder, files, options);
   return {
     recipe,
     folder,
     sources,
     prepared,
     result: judge(recipe, prepared, cache),
-    version: (before?.version ?? 0) + 1,
+    version: options.version,
     cache,
   };
 }

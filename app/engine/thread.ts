@@ -1,5 +1,6 @@
 import { type Problem, ProblemError } from '../../core/table/problem';
-import type { RequestName, Requests } from '../contract/messages';
+import type { Worker } from 'node:worker_threads';
+import type { BenchView, EventName, RequestName, Requests } from '../contract/messages';
 import type { Engine } from './engine';
 import type { EngineHost, Heard } from './host';
 import { startThread } from './spawn';
@@ -21,28 +22,38 @@ interface Waiting {
   readonly reject: (error: unknown) => void;
 }
 
+/** An engine thread that dies so often within so many milliseconds is not started again. */
+const MOST_DEATHS = 3;
+const WITHIN_MS = 60_000;
+
 /**
  * An engine in its own thread, so that a door's own thread never waits. When the thread dies, what was asked is
- * rejected and a new one opens the same recipe: autosave brings the work back.
+ * rejected and a new one opens the same bench: autosave brings the work back. Numbers of views go on growing over
+ * that, because a window ignores a view that is older than its own. After three deaths in a minute every request is
+ * rejected with the problem `engine-stopped`.
  */
-export function startEngineThread(host: Omit<EngineHost, 'now'>): Engine {
+export function startEngineThread(host: Omit<EngineHost, 'now' | 'shown'>): Engine {
   const listeners = new Set<Heard>();
   const waiting = new Map<number, Waiting>();
-  let opened: string | undefined;
+  let shown: BenchView | undefined;
   let closing = false;
   let next = 1;
-  let thread = start();
+  let deaths: readonly number[] = [];
+  let fault = 'no reason given';
+  let thread: Worker | undefined = start();
 
-  function start(): ReturnType<typeof startThread> {
-    const started = startThread('enginethread', { workerData: host });
+  function start(): Worker {
+    const numbers = shown && { revision: shown.revision, version: shown.version };
+    const started = startThread('enginethread', { workerData: { ...host, shown: numbers } });
     started.on('message', (word: FromThread) => hear(word));
-    started.on('error', () => undefined);
+    started.on('error', (error) => (fault = error instanceof Error ? error.message : String(error)));
     started.on('exit', () => died());
     return started;
   }
 
   function hear(word: FromThread): void {
     if (word.type === 'event') {
+      if ((word.name as EventName) === 'bench') shown = word.data;
       listeners.forEach((heard) => heard(word.name, word.data));
       return;
     }
@@ -54,11 +65,29 @@ export function startEngineThread(host: Omit<EngineHost, 'now'>): Engine {
   }
 
   function died(): void {
-    for (const asked of waiting.values()) asked.reject(new Error('the engine stopped and was started again'));
+    const asked = [...waiting.values()];
     waiting.clear();
-    if (closing) return;
-    thread = start();
-    if (opened !== undefined) void ask('bench.open', { path: opened }).catch(() => undefined);
+    thread = undefined;
+    deaths = [...deaths, Date.now()].slice(-MOST_DEATHS);
+    const often = deaths.length === MOST_DEATHS && deaths.at(-1)! - deaths[0]! < WITHIN_MS;
+    if (!closing && !often) thread = start();
+    const why = often ? stopped() : new Error(`the engine stopped (${fault})`);
+    for (const { reject } of asked) reject(why);
+    // The work of the thread that died ended with it.
+    listeners.forEach((heard) => heard('progress', undefined));
+    if (thread && shown) void reopen(shown);
+  }
+
+  /** Opens what was open; an unsaved bench without a step has no file, and is begun again. */
+  async function reopen({ recipePath, keptIn }: BenchView): Promise<void> {
+    await ask('bench.open', { path: recipePath ?? keptIn })
+      .catch(() => (recipePath === undefined ? ask('bench.new', {}) : undefined))
+      .catch(() => undefined);
+  }
+
+  function stopped(): ProblemError {
+    const found = `${deaths.length} times within a minute (${fault})`;
+    return new ProblemError([{ code: 'engine-stopped', severity: 'error', found }]);
   }
 
   function ask<Name extends RequestName>(
@@ -70,6 +99,10 @@ export function startEngineThread(host: Omit<EngineHost, 'now'>): Engine {
 
   function send(word: (id: number) => ToThread): Promise<unknown> {
     return new Promise((resolve, reject) => {
+      if (!thread) {
+        reject(stopped());
+        return;
+      }
       const id = next++;
       waiting.set(id, { resolve, reject });
       thread.postMessage(word(id));
@@ -77,20 +110,17 @@ export function startEngineThread(host: Omit<EngineHost, 'now'>): Engine {
   }
 
   return {
-    async handle(name, params) {
-      const result = await ask(name, params);
-      const path = (result as { recipePath?: string } | undefined)?.recipePath;
-      if (path !== undefined) opened = path;
-      return result;
-    },
+    handle: ask,
     listen(heard) {
       listeners.add(heard);
       return () => listeners.delete(heard);
     },
     async close() {
       closing = true;
+      const last = thread;
+      if (!last) return;
       await send((id) => ({ type: 'close', id }));
-      await thread.terminate();
+      await last.terminate();
     },
   };
 }

@@ -7,19 +7,33 @@ import { priorityOrder, settle } from './settle';
 import type { RosterPolicy } from './sourcemap';
 import { valueOf } from './values';
 
+/** Merges sources in one go; see `mergeSteps`. */
+export function mergeSources(sources: readonly ReadSource[], policy: RosterPolicy): Roster {
+  const steps = mergeSteps(sources, policy);
+  for (;;) {
+    const { done, value } = steps.next();
+    if (done === true) return value;
+  }
+}
+
 /**
  * Merges sources into one roster with one row per object, in the order of the most trusted source and then of the
  * others. Nothing is averaged: each value is that of the most trusted source that has it, and remembers source and
  * line. Per source, rowsRead = objectRows + duplicates + quarantine.
+ *
+ * Stops between its steps, so that who runs it can do other things, or give up, while many rows are merged.
  */
-export function mergeSources(sources: readonly ReadSource[], policy: RosterPolicy): Roster {
+export function* mergeSteps(sources: readonly ReadSource[], policy: RosterPolicy): Generator<undefined, Roster> {
   const order = priorityOrder(sources, policy.priority);
-  const found = identify(
+  const found = yield* identify(
     order.map((index) => sources[index]!),
     policy,
   );
-  const objects = found.objects.map((object) => inSourceOrder(object, order));
+  const asGiven = order.every((source, place) => source === place);
+  const objects = asGiven ? found.objects : found.objects.map((object) => inSourceOrder(object, order));
+  yield;
   const columns = settle(sources, objects, order);
+  yield;
   return {
     rows: objects.length,
     sources: sources.map(({ id }) => id),
@@ -27,9 +41,7 @@ export function mergeSources(sources: readonly ReadSource[], policy: RosterPolic
     keys: objects.map(({ key }) => key),
     columns,
     extras: sources.flatMap((source, index) => source.extras.map((column) => aligned(column, objects, index))),
-    lines: sources.map((source, index) =>
-      Int32Array.from(objects, ({ rows }) => (rows[index]! < 0 ? 0 : source.lines[rows[index]!]!)),
-    ),
+    lines: sources.map((source, index) => linesOf(source, objects, index)),
     conflicts: [
       ...positionConflicts(sources, objects, order, found),
       ...valueConflicts(sources, objects, columns, policy.conflictSigma),
@@ -49,10 +61,21 @@ function inSourceOrder(object: Identity, order: readonly number[]): Identity {
 }
 
 function aligned(column: NumberColumn, objects: readonly Identity[], source: number): NumberColumn {
-  const values = Float64Array.from(objects, ({ rows }) =>
-    rows[source]! < 0 ? Number.NaN : column.values[rows[source]!]!,
-  );
+  const values = new Float64Array(objects.length);
+  for (let object = 0; object < objects.length; object++) {
+    const row = objects[object]!.rows[source]!;
+    values[object] = row < 0 ? Number.NaN : column.values[row]!;
+  }
   return { ...column, values };
+}
+
+function linesOf({ lines }: ReadSource, objects: readonly Identity[], source: number): Int32Array {
+  const found = new Int32Array(objects.length);
+  for (let object = 0; object < objects.length; object++) {
+    const row = objects[object]!.rows[source]!;
+    found[object] = row < 0 ? 0 : lines[row]!;
+  }
+  return found;
 }
 
 function positionConflicts(

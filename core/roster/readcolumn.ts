@@ -7,6 +7,7 @@ import type { Assigned } from './meaning';
 /** A column of a source in its canonical unit, as far as its cells can be read. */
 export function canonicalValues(assigned: Assigned, rows: number): Float64Array {
   const { column, factor } = assigned;
+  // Loops: Float64Array.from with a function takes ten times as long.
   if (column.type === 'number') {
     const values = column.values.slice(0, rows);
     convert(values, factor!);

@@ -41,6 +41,8 @@ export type ProblemCode =
   | 'edition-not-found'
   | 'edition-differs'
   | 'unknown-option'
+  | 'engine-stopped'
+  | 'program-fault'
   | 'cancelled';
 
 /** One thing that is wrong, as data: where, what was found, what was expected, what to do. */

@@ -179,6 +179,14 @@ const WORDINGS: Readonly<Record<ProblemCode, Wording>> = {
     says: (p) => `${or(p.found, 'an option')} is not understood`,
     remedy: 'See --help.',
   },
+  'engine-stopped': {
+    says: (p) => `the engine stopped ${or(p.found, 'again and again')} and was not started again`,
+    remedy: 'Your work is kept: start Halosieve again. Please report what was asked of it last.',
+  },
+  'program-fault': {
+    says: (p) => `the program failed: ${or(p.found, 'unknown reason')}`,
+    remedy: 'Your work is kept. Please report this with what you did last.',
+  },
   cancelled: {
     says: () => 'stopped before it was done; nothing was changed',
     remedy: 'Start it again when you like.',

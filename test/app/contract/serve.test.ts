@@ -67,7 +67,8 @@ it('a bug is told to the door, and the window gets one line without a trace', as
   const { seat, sent, bugs } = seated(() => Promise.reject(bug));
   seat.take({ type: 'ask', id: 6, name: 'bench.view', params: {} });
   await vi.waitFor(() => expect(sent).toHaveLength(1));
-  expect(sent[0]).toMatchObject({ type: 'refusal', id: 6 });
+  expect(sent[0]).toMatchObject({ type: 'refusal', id: 6, problems: [{ code: 'program-fault' }] });
+  expect(JSON.stringify(sent[0])).toMatch(/Your work is kept\. Please report this/);
   expect(JSON.stringify(sent[0])).toContain('no such thing');
   expect(JSON.stringify(sent[0])).not.toContain('somewhere');
   expect(bugs).toEqual([bug]);
