@@ -26,6 +26,7 @@ export function valueConflicts(
   limitSigma: number,
 ): Conflict[] {
   const found: Conflict[] = [];
+  if (sources.length < 2) return found;
   objects.forEach((object, index) => {
     if (object.rows.filter((row) => row >= 0).length < 2) return;
     for (const quantity of COMPARED) {

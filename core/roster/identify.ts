@@ -50,14 +50,17 @@ export function identify(sources: readonly ReadSource[], policy: RosterPolicy): 
     for (const duplicate of standing.duplicates) duplicates.push(duplicate);
     problems.push(...condensed(standing.problems, 'rows'), ...condensed(found.problems, 'rows'));
     for (const row of standing.rows) {
-      const target = found.target.get(row);
-      const object = target === undefined ? newObject(source, row, keys[row]!, keysTaken) : objects[target]!;
-      if (target === undefined) objects.push({ ...object, rows: sources.map((_, at) => (at === index ? row : -1)) });
-      else {
+      const target = found.target[row]!;
+      if (target < 0) {
+        const object = newObject(source, row, keys[row]!, keysTaken, sources.length);
+        object.rows[index] = row;
+        objects.push(object);
+      } else {
+        const object = objects[target]!;
         const far = farNamesake(sources, object, index, row, radiusDeg);
         if (far) farNamesakes.push({ object: target, ...far });
         object.rows[index] = row;
-        if (keys[row] !== '') object.aka.push(keys[row]!);
+        if (keys[row] !== '' && keys[row] !== object.key) object.aka.push(keys[row]!);
       }
     }
   });
@@ -75,12 +78,15 @@ function keyMaker(aliases: RosterPolicy['aliases']): (name: string) => string {
   };
 }
 
-function newObject(source: ReadSource, row: number, clean: string, keysTaken: Set<string>): Identity {
+function newObject(source: ReadSource, row: number, clean: string, keysTaken: Set<string>, sources: number): Identity {
   const base = clean || cleanName(skyName(source, row));
   let key = base;
   for (let number = 2; keysTaken.has(key); number++) key = `${base}#${number}`;
   keysTaken.add(key);
-  return { key, name: source.names[row]! || skyName(source, row), rows: [], aka: clean === '' ? [] : [clean] };
+  const rows: number[] = [];
+  for (let at = 0; at < sources; at++) rows.push(-1);
+  const aka = clean === '' || clean === key ? [] : [clean];
+  return { key, name: source.names[row]! || skyName(source, row), rows, aka };
 }
 
 function farNamesake(

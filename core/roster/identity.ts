@@ -3,6 +3,6 @@ export interface Identity {
   readonly key: string;
   readonly name: string;
   readonly rows: number[];
-  /** Cleaned names that its rows bear. */
+  /** Cleaned names that its rows bear, other than its key. */
   readonly aka: string[];
 }

@@ -4,6 +4,7 @@ import type { Identity } from './identity';
 import type { ReadSource } from './roster';
 import { neighbours, type SkyPoints } from './skymatch';
 import { placesOf } from './skyname';
+import { valueOf } from './values';
 
 /** One more source to be laid over the objects that earlier sources gave. */
 export interface MatchTask {
@@ -19,48 +20,48 @@ export interface MatchTask {
   readonly radiusDeg: number;
 }
 
-/** The object of each standing row that has one already, and what was not clear about it. */
+/** The object of each row of the source, −1 for a row that has none yet, and what was not clear about it. */
 export interface Matched {
-  readonly target: ReadonlyMap<number, number>;
+  readonly target: Int32Array;
   readonly problems: readonly Problem[];
 }
 
 /** Matches by name first, then what is left by place; an object takes one row, a row one object. */
 export function matchRows(task: MatchTask): Matched {
-  const target = new Map<number, number>();
-  const taken = new Set<number>();
+  const target = new Int32Array(task.keys.length).fill(-1);
+  const taken = new Uint8Array(task.objects.length);
   if (task.objects.length === 0) return { target, problems: [] };
   const take = (row: number, object: number): void => {
-    target.set(row, object);
-    taken.add(object);
+    target[row] = object;
+    taken[object] = 1;
   };
   if (task.matchNames) {
-    for (const { row, object } of namePairs(task)) if (!target.has(row) && !taken.has(object)) take(row, object);
+    eachNamePair(task, (row, object) => {
+      if (target[row]! < 0 && taken[object] === 0) take(row, object);
+    });
   }
   const { pairs, problems } = skyPairs(task, target, taken);
   const late = new Map<number, Problem>();
   for (const { row, object } of pairs) {
-    if (target.has(row)) continue;
-    if (!taken.has(object)) take(row, object);
+    if (target[row]! >= 0) continue;
+    if (taken[object] === 0) take(row, object);
     else if (!late.has(row)) late.set(row, ambiguous(task.source, row, task.objects[object]!.name));
   }
   return { target, problems: [...problems, ...late.values()] };
 }
 
 /** Rows and objects of one name; an object's own key before a name that it bears in another source. */
-function namePairs({ standing, keys, objects }: MatchTask): { row: number; object: number }[] {
+function eachNamePair({ standing, keys, objects }: MatchTask, found: (row: number, object: number) => void): void {
   const words = standing.map((row) => keys[row]!);
   const own = objects.map(({ key }) => key);
-  const others = objects.flatMap(({ key, aka }, object) =>
-    aka.filter((word) => word !== key).map((word) => ({ word, object })),
-  );
-  const first = equalWords(words, own).map(([at, object]) => ({ row: standing[at]!, object }));
+  for (const [at, object] of equalWords(words, own)) found(standing[at]!, object);
+  const others: { readonly word: string; readonly object: number }[] = [];
+  objects.forEach(({ aka }, object) => {
+    for (const word of aka) others.push({ word, object });
+  });
+  if (others.length === 0) return;
   const learned = others.map(({ word }) => word);
-  const second = equalWords(words, learned).map(([at, place]) => ({
-    row: standing[at]!,
-    object: others[place]!.object,
-  }));
-  return [...first, ...second];
+  for (const [at, place] of equalWords(words, learned)) found(standing[at]!, others[place]!.object);
 }
 
 interface SkyPair {
@@ -72,15 +73,16 @@ interface SkyPair {
 /** Pairs of free rows and free objects within the radius, the closest first, so that two rows do not get one object. */
 function skyPairs(
   task: MatchTask,
-  target: ReadonlyMap<number, number>,
-  taken: ReadonlySet<number>,
+  target: Int32Array,
+  taken: Uint8Array,
 ): { pairs: readonly SkyPair[]; problems: readonly Problem[] } {
   const { source, standing, keys, objects } = task;
-  const open = standing.filter((row) => !target.has(row));
+  const open = standing.filter((row) => target[row]! < 0);
   const problems: Problem[] = [];
+  if (open.length === 0) return { pairs: [], problems };
   const pairs = neighbours(placesOf(source, open), objectPlaces(task), task.radiusDeg).flatMap((near, at) => {
     const row = open[at]!;
-    const free = near.filter(({ index }) => !taken.has(index));
+    const free = near.filter(({ index }) => taken[index] === 0);
     if (free.length > 1) problems.push(ambiguous(source, row, source.names[row]! || `line ${source.lines[row]!}`));
     return free.map(({ index, separationDeg }): SkyPair => ({ row, object: index, apart: separationDeg }));
   });
@@ -105,11 +107,12 @@ function ambiguous(source: ReadSource, row: number, found: string): Problem {
 
 /** Objects stand where the most trusted source that has them puts them. */
 function objectPlaces({ objects, sources }: MatchTask): SkyPoints {
-  const value =
-    (id: 'ra' | 'dec') =>
-    ({ rows }: Identity): number => {
-      const source = rows.findIndex((row) => row >= 0);
-      return sources[source]!.measured.columns.get(id)?.values[rows[source]!] ?? Number.NaN;
-    };
-  return { ra: Float64Array.from(objects, value('ra')), dec: Float64Array.from(objects, value('dec')) };
+  const [ra, dec] = [new Float64Array(objects.length), new Float64Array(objects.length)];
+  for (let object = 0; object < objects.length; object++) {
+    const { rows } = objects[object]!;
+    const source = rows.findIndex((row) => row >= 0);
+    ra[object] = valueOf(sources[source]!, rows[source]!, 'ra');
+    dec[object] = valueOf(sources[source]!, rows[source]!, 'dec');
+  }
+  return { ra, dec };
 }

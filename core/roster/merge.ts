@@ -18,7 +18,8 @@ export function mergeSources(sources: readonly ReadSource[], policy: RosterPolic
     order.map((index) => sources[index]!),
     policy,
   );
-  const objects = found.objects.map((object) => inSourceOrder(object, order));
+  const asGiven = order.every((source, place) => source === place);
+  const objects = asGiven ? found.objects : found.objects.map((object) => inSourceOrder(object, order));
   const columns = settle(sources, objects, order);
   return {
     rows: objects.length,
@@ -27,9 +28,7 @@ export function mergeSources(sources: readonly ReadSource[], policy: RosterPolic
     keys: objects.map(({ key }) => key),
     columns,
     extras: sources.flatMap((source, index) => source.extras.map((column) => aligned(column, objects, index))),
-    lines: sources.map((source, index) =>
-      Int32Array.from(objects, ({ rows }) => (rows[index]! < 0 ? 0 : source.lines[rows[index]!]!)),
-    ),
+    lines: sources.map((source, index) => linesOf(source, objects, index)),
     conflicts: [
       ...positionConflicts(sources, objects, order, found),
       ...valueConflicts(sources, objects, columns, policy.conflictSigma),
@@ -49,10 +48,21 @@ function inSourceOrder(object: Identity, order: readonly number[]): Identity {
 }
 
 function aligned(column: NumberColumn, objects: readonly Identity[], source: number): NumberColumn {
-  const values = Float64Array.from(objects, ({ rows }) =>
-    rows[source]! < 0 ? Number.NaN : column.values[rows[source]!]!,
-  );
+  const values = new Float64Array(objects.length);
+  for (let object = 0; object < objects.length; object++) {
+    const row = objects[object]!.rows[source]!;
+    values[object] = row < 0 ? Number.NaN : column.values[row]!;
+  }
   return { ...column, values };
+}
+
+function linesOf({ lines }: ReadSource, objects: readonly Identity[], source: number): Int32Array {
+  const found = new Int32Array(objects.length);
+  for (let object = 0; object < objects.length; object++) {
+    const row = objects[object]!.rows[source]!;
+    found[object] = row < 0 ? 0 : lines[row]!;
+  }
+  return found;
 }
 
 function positionConflicts(

@@ -1,3 +1,4 @@
+import type { MeasuredColumn } from '../table/measured';
 import type { MeasuredId } from '../table/role';
 import { MEASURED } from '../table/role';
 import type { Identity } from './identity';
@@ -40,7 +41,8 @@ export function settle(
 ): ReadonlyMap<MeasuredId, SettledColumn> {
   const settled = new Map<MeasuredId, SettledColumn>();
   for (const { id } of MEASURED) {
-    if (sources.some((source) => source.measured.columns.has(id))) settled.set(id, emptyColumn(objects.length));
+    const found = sources.flatMap((source) => source.measured.columns.get(id) ?? []);
+    if (found.length > 0) settled.set(id, emptyColumn(objects.length, found));
   }
   for (const wanted of GROUPS) {
     for (let index = 0; index < objects.length; index++) {
@@ -52,13 +54,16 @@ export function settle(
   return settled;
 }
 
-function emptyColumn(size: number): SettledColumn {
+/** A column without values; with errors only of the kinds that a source gives. */
+function emptyColumn(size: number, found: readonly MeasuredColumn[]): SettledColumn {
   const missing = (): Float64Array => new Float64Array(size).fill(Number.NaN);
+  const given = (kind: 'sigma' | 'minus' | 'plus'): Float64Array | undefined =>
+    found.some((column) => column[kind]) ? missing() : undefined;
   return {
     values: missing(),
-    sigma: missing(),
-    minus: missing(),
-    plus: missing(),
+    sigma: given('sigma'),
+    minus: given('minus'),
+    plus: given('plus'),
     fromSource: new Int16Array(size).fill(-1),
     fromLine: new Int32Array(size),
   };
@@ -107,9 +112,9 @@ function take(
     const to = settled.get(id)!;
     const { values, sigma, minus, plus } = from.measured.columns.get(id)!;
     to.values[object] = values[row]!;
-    to.sigma![object] = sigma?.[row] ?? Number.NaN;
-    to.minus![object] = minus?.[row] ?? Number.NaN;
-    to.plus![object] = plus?.[row] ?? Number.NaN;
+    if (to.sigma && sigma) to.sigma[object] = sigma[row]!;
+    if (to.minus && minus) to.minus[object] = minus[row]!;
+    if (to.plus && plus) to.plus[object] = plus[row]!;
     to.fromSource[object] = source;
     to.fromLine[object] = from.lines[row]!;
   }

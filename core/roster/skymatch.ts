@@ -81,10 +81,13 @@ interface Zones {
 function zonesOf({ ra, dec }: SkyPoints, height: number): Zones {
   const of = (declination: number): number => Math.floor((declination + 90) / height);
   const turned = ra.map(wrapDeg);
-  const row = Int32Array.from(dec, (_, index) => index).filter((index) => !Number.isNaN(ra[index]! + dec[index]!));
-  row.sort((p, q) => of(dec[p]!) - of(dec[q]!) || turned[p]! - turned[q]! || p - q);
-  const zone = Int32Array.from(row, (index) => of(dec[index]!));
-  const sorted = Float64Array.from(row, (index) => turned[index]!);
+  const zoneOf = dec.map(of);
+  const row = new Int32Array(dec.length)
+    .map((_, index) => index)
+    .filter((index) => !Number.isNaN(ra[index]! + dec[index]!));
+  row.sort((p, q) => zoneOf[p]! - zoneOf[q]! || turned[p]! - turned[q]! || p - q);
+  const zone = row.map((index) => zoneOf[index]!);
+  const sorted = new Float64Array(row.length).map((_, at) => turned[row[at]!]!);
   const firstFrom = (wanted: number, start: number): number => {
     let [from, to] = [0, row.length];
     while (from < to) {

@@ -6,7 +6,7 @@ import { valueOf } from './values';
 export function placesOf(source: ReadSource, rows: readonly number[]): SkyPoints {
   const values = (id: 'ra' | 'dec'): Float64Array => {
     const column = source.measured.columns.get(id)?.values;
-    return Float64Array.from(rows, (row) => column?.[row] ?? Number.NaN);
+    return new Float64Array(rows.length).map((_, at) => column?.[rows[at]!] ?? Number.NaN);
   };
   return { ra: values('ra'), dec: values('dec') };
 }

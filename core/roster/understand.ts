@@ -29,15 +29,13 @@ export function understandSource(id: string, file: DelimitedFile, meanings: read
   problems.push(...cautions(columns, assigned, where));
 
   const kept = placedRows(columns, file.table.rows);
-  const pick = (values: Float64Array): Float64Array => Float64Array.from(kept, (row) => values[row]!);
-  const name = assigned.get('name');
-  const names = Array.from(kept, (row) => (name === undefined ? '' : cellText(name.column, row)));
+  const pick = (values: Float64Array): Float64Array => picked(values, kept, new Float64Array(kept.length));
   return {
     id,
-    names,
+    names: namesOf(kept, assigned.get('name')),
     measured: { rows: kept.length, columns: mapColumns(columns, pick) },
     extras: extras.map(({ column }) => extraColumn(id, column as NumberColumn, pick)),
-    lines: Int32Array.from(kept, (row) => file.lines[row]!),
+    lines: picked(file.lines, kept, new Int32Array(kept.length)),
     quarantine: [...file.quarantine.map((row) => ({ source: id, ...row })), ...unplaced(id, file, kept, assigned)],
     problems: [...file.problems, ...problems],
   };
@@ -99,9 +97,23 @@ function cautions(
 
 function placedRows(columns: ReadonlyMap<MeasuredId, MeasuredColumn>, rows: number): Int32Array {
   const [ra, dec] = [columns.get('ra')?.values, columns.get('dec')?.values];
-  const placed: number[] = [];
-  for (let row = 0; row < rows; row++) if (ra && dec && !Number.isNaN(ra[row]! + dec[row]!)) placed.push(row);
-  return Int32Array.from(placed);
+  const placed = new Int32Array(rows);
+  let count = 0;
+  for (let row = 0; row < rows; row++) if (ra && dec && !Number.isNaN(ra[row]! + dec[row]!)) placed[count++] = row;
+  return placed.slice(0, count);
+}
+
+/** The values of some rows, in `into`; all of them as they are when every row is kept. */
+function picked<Values extends Float64Array | Int32Array>(values: Values, rows: Int32Array, into: Values): Values {
+  if (rows.length === values.length) return values;
+  for (let at = 0; at < rows.length; at++) into[at] = values[rows[at]!]!;
+  return into;
+}
+
+function namesOf(rows: Int32Array, name: Assigned | undefined): string[] {
+  const names: string[] = [];
+  for (let at = 0; at < rows.length; at++) names.push(name === undefined ? '' : cellText(name.column, rows[at]!));
+  return names;
 }
 
 function mapColumns(
@@ -127,11 +139,14 @@ function unplaced(
   kept: Int32Array,
   roles: ReadonlyMap<RoleId, Assigned>,
 ): QuarantinedRow[] {
-  const placed = new Set(kept);
+  let placed = 0;
   const parts = (['ra', 'dec', 'gal_l', 'gal_b'] as const).flatMap((role) => roles.get(role) ?? []);
   const rows: QuarantinedRow[] = [];
   for (let row = 0; row < file.table.rows; row++) {
-    if (placed.has(row)) continue;
+    if (kept[placed] === row) {
+      placed++;
+      continue;
+    }
     const line = file.lines[row]!;
     const cells = parts.map(({ column }) => `${column.name} = "${cellText(column, row)}"`);
     const found = cells.length === 0 ? 'no column with a position' : cells.join(', ');
