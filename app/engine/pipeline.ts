@@ -6,8 +6,8 @@ import type { Recipe } from '../../core/edition/recipe';
 import { solarFrame } from '../../core/frame/solarframes';
 import { deriveQuantities } from '../../core/quantities/derive';
 import type { QuantitySet } from '../../core/quantities/quantity';
-import { mergeSources } from '../../core/roster/merge';
-import type { Roster } from '../../core/roster/roster';
+import { mergeSteps } from '../../core/roster/merge';
+import type { ReadSource, Roster } from '../../core/roster/roster';
 import type { Source } from '../../core/roster/sourcemap';
 import { understandSource } from '../../core/roster/understand';
 import { fail } from '../../core/table/problem';
@@ -15,6 +15,9 @@ import type { Progress } from '../contract/messages';
 import { withFile } from './files';
 import { loadSource } from './loader';
 import type { SourceFile } from './sourcefile';
+
+/** Fewer rows are merged before a word about it could be read. */
+const SHOWN_FROM = 100_000;
 
 /** A recipe with everything that follows from its sources, before any cut. */
 export interface Prepared {
@@ -46,7 +49,7 @@ export async function prepare(recipe: Recipe, folder: string, options: PrepareOp
     }
     files.set(source.id, file);
   }
-  return assemble(recipe, folder, files);
+  return assemble(recipe, folder, files, options);
 }
 
 /** Reads one source of a recipe in the loader thread. */
@@ -62,13 +65,33 @@ export async function openSource(source: Source, folder: string, options: Prepar
   );
 }
 
-/** Roster and quantities of sources that are already read; sources without a file are left out. */
-export function assemble(recipe: Recipe, folder: string, files: ReadonlyMap<string, SourceFile>): Prepared {
-  const read = recipe.sources.flatMap((source) => {
-    const found = files.get(source.id);
-    return found ? [understandSource(source.id, found.file, source.columns)] : [];
-  });
-  const roster = mergeSources(read, recipe.roster);
+/**
+ * Roster and quantities of sources that are already read; sources without a file are left out. Other requests, a stop
+ * among them, get their turn between the steps. Errors: cancelled.
+ */
+export async function assemble(
+  recipe: Recipe,
+  folder: string,
+  files: ReadonlyMap<string, SourceFile>,
+  { onProgress, signal }: PrepareOptions,
+): Promise<Prepared> {
+  const rows = [...files.values()].reduce((sum, { file }) => sum + file.rowsRead, 0);
+  if (rows > SHOWN_FROM) onProgress?.({ label: 'Merging the sources', share: undefined });
+  const pause = async (): Promise<void> => {
+    await new Promise(setImmediate);
+    if (signal?.aborted === true) fail('cancelled');
+  };
+  const read: ReadSource[] = [];
+  for (const { id, columns } of recipe.sources) {
+    const found = files.get(id);
+    if (!found) continue;
+    read.push(understandSource(id, found.file, columns));
+    await pause();
+  }
+  const steps = mergeSteps(read, recipe.roster);
+  let step = steps.next();
+  for (; step.done !== true; step = steps.next()) await pause();
+  const roster = step.value;
   const { rv, recalibration } = recipe.extinction;
   const quantities = deriveQuantities(roster, {
     frame: solarFrame(recipe.frame)!,

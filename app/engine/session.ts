@@ -60,7 +60,7 @@ export async function sessionOf(
   for (const source of recipe.sources) sources.set(source.id, await stateOf(source, folder, before, options));
   const files = new Map<string, SourceFile>();
   for (const [id, { state, file }] of sources) if (state === 'read' && file) files.set(id, file);
-  const prepared = assemble(recipe, folder, files);
+  const prepared = await assemble(recipe, folder, files, options);
   return {
     recipe,
     folder,

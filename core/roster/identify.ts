@@ -26,14 +26,14 @@ export interface Identification {
 }
 
 /**
- * Finds which rows of several sources are one object: by cleaned name (aliases applied first), then by place on the
+ * Finds, source by source with stops between, which rows of several sources are one object: by cleaned name (aliases applied first), then by place on the
  * sky. Sources are taken in the order given; each new one is matched to the objects so far. An object takes at most
  * one row of a source; a later row with the same name in the same source is a duplicate.
  *
  * An object found by place is known by the names of all its rows from then on. Its key is the cleaned name of its
  * first row; where two distinct objects share one (names may be left unmatched), the later gets `#2`, `#3`, … behind it.
  */
-export function identify(sources: readonly ReadSource[], policy: RosterPolicy): Identification {
+export function* identify(sources: readonly ReadSource[], policy: RosterPolicy): Generator<undefined, Identification> {
   const objects: Identity[] = [];
   const keysTaken = new Set<string>();
   const duplicates: DuplicateRow[] = [];
@@ -42,13 +42,17 @@ export function identify(sources: readonly ReadSource[], policy: RosterPolicy): 
   const cleaned = keyMaker(policy.aliases);
   const radiusDeg = policy.matchRadiusArcsec / 3600;
 
-  sources.forEach((source, index) => {
+  for (const [index, source] of sources.entries()) {
+    yield;
     const keys = source.names.map(cleaned);
+    yield;
     const standing = withoutDuplicates(source, keys);
+    yield;
     const { matchNames } = policy;
     const found = matchRows({ source, sources, standing: standing.rows, keys, objects, matchNames, radiusDeg });
     for (const duplicate of standing.duplicates) duplicates.push(duplicate);
     problems.push(...condensed(standing.problems, 'rows'), ...condensed(found.problems, 'rows'));
+    yield;
     for (const row of standing.rows) {
       const target = found.target[row]!;
       if (target < 0) {
@@ -63,7 +67,7 @@ export function identify(sources: readonly ReadSource[], policy: RosterPolicy): 
         if (keys[row] !== '' && keys[row] !== object.key) object.aka.push(keys[row]!);
       }
     }
-  });
+  }
   const far = farNamesakes.map((namesake) => farProblem(namesake, objects, sources));
   problems.push(...condensed(far, 'objects'));
   return { objects, duplicates, problems, farNamesakes };

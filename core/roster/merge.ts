@@ -7,20 +7,33 @@ import { priorityOrder, settle } from './settle';
 import type { RosterPolicy } from './sourcemap';
 import { valueOf } from './values';
 
+/** Merges sources in one go; see `mergeSteps`. */
+export function mergeSources(sources: readonly ReadSource[], policy: RosterPolicy): Roster {
+  const steps = mergeSteps(sources, policy);
+  for (;;) {
+    const { done, value } = steps.next();
+    if (done === true) return value;
+  }
+}
+
 /**
  * Merges sources into one roster with one row per object, in the order of the most trusted source and then of the
  * others. Nothing is averaged: each value is that of the most trusted source that has it, and remembers source and
  * line. Per source, rowsRead = objectRows + duplicates + quarantine.
+ *
+ * Stops between its steps, so that who runs it can do other things, or give up, while many rows are merged.
  */
-export function mergeSources(sources: readonly ReadSource[], policy: RosterPolicy): Roster {
+export function* mergeSteps(sources: readonly ReadSource[], policy: RosterPolicy): Generator<undefined, Roster> {
   const order = priorityOrder(sources, policy.priority);
-  const found = identify(
+  const found = yield* identify(
     order.map((index) => sources[index]!),
     policy,
   );
   const asGiven = order.every((source, place) => source === place);
   const objects = asGiven ? found.objects : found.objects.map((object) => inSourceOrder(object, order));
+  yield;
   const columns = settle(sources, objects, order);
+  yield;
   return {
     rows: objects.length,
     sources: sources.map(({ id }) => id),
