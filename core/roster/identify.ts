@@ -87,8 +87,8 @@ function newObject(source: ReadSource, row: number, clean: string, keysTaken: Se
   let key = base;
   for (let number = 2; keysTaken.has(key); number++) key = `${base}#${number}`;
   keysTaken.add(key);
-  const rows: number[] = [];
-  for (let at = 0; at < sources; at++) rows.push(-1);
+  // Not pushed one by one: an array that grows takes room for many more.
+  const rows = new Array<number>(sources).fill(-1);
   const aka = clean === '' || clean === key ? [] : [clean];
   return { key, name: source.names[row]! || skyName(source, row), rows, aka };
 }
