@@ -3,6 +3,7 @@ import { disc } from './disc';
 import { extinction } from './extinction';
 import { lasso } from './lasso';
 import { metallicity } from './metallicity';
+import { MISSING_RULES } from './missing';
 import { named } from './named';
 import { plane } from './plane';
 import { range } from './range';
@@ -10,9 +11,7 @@ import { range } from './range';
 const common = z.strictObject({
   id: z.string().regex(/^[a-z0-9][a-z0-9-]*$/),
   on: z.boolean(),
-  missing: z
-    .enum(['drop', 'keep', 'unjudged'])
-    .describe('What the cut says of an object whose outcome hangs on a missing value'),
+  missing: z.enum(MISSING_RULES).describe('What each test of the cut says of an object that lacks the value it tests'),
   rationale: z.string().describe('Why the cut stands where it stands; a sample cannot be frozen without'),
   evidence: z.array(z.string()).describe('DOIs, bibcodes or arXiv ids'),
   author: z.string(),

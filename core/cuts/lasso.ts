@@ -42,10 +42,11 @@ export const lasso: CutKind<Parameters> = {
   needs: (p) => [p.x, p.y],
   judge(p, objects, margin) {
     const [x, y] = [objects.column(p.x), objects.column(p.y)];
-    if (x === undefined || y === undefined) return nothingJudged(objects.rows);
+    if (x === undefined || y === undefined) return [nothingJudged(objects.rows)];
     const within = judgeInside(p, objects, x, y, margin);
-    return p.action === 'keep' ? within : opposite(within);
+    return [p.action === 'keep' ? within : opposite(within)];
   },
+  passing: () => 'every',
   describe: (p) =>
     `${p.action === 'drop' ? 'drop' : 'keep only'} objects inside a drawn shape of ${p.polygon.length} vertices in ` +
     `${p.x} and ${p.y}`,

@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { Bitset } from '../table/bitset';
-import type { CutKind, Outcome } from './contract';
+import type { CutKind } from './contract';
 
 const parameters = z.strictObject({
   objects: z
@@ -26,7 +26,7 @@ export const named: CutKind<Parameters> = {
   defaults: { objects: [] },
   proposals: [],
   needs: () => [],
-  judge(p, objects): Outcome {
+  judge(p, objects) {
     const rowOf = objects.memo('rows by key', () => new Map(objects.keys.map((key, row) => [key, row])));
     const dropped = new Bitset(objects.rows);
     const forced = new Bitset(objects.rows);
@@ -35,8 +35,9 @@ export const named: CutKind<Parameters> = {
       if (row !== undefined) (action === 'keep' ? forced : dropped).add(row);
     }
     const passes = dropped.not();
-    return { surely: passes, passes, possibly: passes, unjudged: new Bitset(objects.rows), forced };
+    return [{ surely: passes, passes, possibly: passes, unjudged: new Bitset(objects.rows), forced }];
   },
+  passing: () => 'every',
   describe(p) {
     const list = (action: string): string =>
       p.objects

@@ -62,10 +62,11 @@ export const plane: CutKind<Parameters> = {
   needs: (p) => (p.measure === 'position' ? ['x', 'y', 'z'] : ['x', 'y', 'z', 'v_x', 'v_y', 'v_z']),
   judge(p, objects, margin) {
     const column = columnOf(p, objects);
-    if (column === undefined) return nothingJudged(objects.rows);
+    if (column === undefined) return [nothingJudged(objects.rows)];
     const inside = judgeThreshold(column, { limit: p.angleMax, keeps: 'below', absolute: false }, margin);
-    return p.action === 'keep' ? inside : opposite(inside);
+    return [p.action === 'keep' ? inside : opposite(inside)];
   },
+  passing: () => 'every',
   describe,
   limits: (p): Limit[] => [
     {
