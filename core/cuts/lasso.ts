@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { onAxis, placeOn } from './axis';
+import { onAxis, vertexOn } from './axis';
 import { nothingJudged, opposite } from './combine';
 import type { CutKind } from './contract';
 import { judgeInside } from './inside';
@@ -45,7 +45,7 @@ export const lasso: CutKind<Parameters> = {
     if (x === undefined || y === undefined) return [nothingJudged(objects.rows)];
     const [across, up] = [onAxis(x, p.xLog), onAxis(y, p.yLog)];
     const points = { x: across.values, y: up.values, sigmaX: across.sigma, sigmaY: up.sigma, margin };
-    const outline = outlineOf(p.polygon.map(([vx, vy]) => [placeOn(vx, p.xLog), placeOn(vy, p.yLog)]));
+    const outline = outlineOf(p.polygon.map(([vx, vy]) => [vertexOn(vx, p.xLog), vertexOn(vy, p.yLog)]));
     const within = judgeInside(outline, points);
     return [p.action === 'keep' ? within : opposite(within)];
   },

@@ -113,3 +113,32 @@ it('a shape without extent holds nothing', () => {
   ];
   expect(verdicts(nowhere, [1], [1])).toEqual(['dropped']);
 });
+
+describe('a lasso on logarithmic axes', () => {
+  const DECADES: Vertices = [
+    [1, 1],
+    [100, 1],
+    [100, 100],
+    [1, 100],
+  ];
+  const onLog = (x: Cells, y: Cells): Verdict[] => verdicts(DECADES, x, y, { log: true });
+
+  it('what is not positive has no place on the axis and lies outside, whatever its error', () => {
+    expect(onLog([0, -5, [0, 50], [-0.1, 50], 10], [10, 10, 10, 10, [-1, 50]])).toEqual(Array(5).fill('dropped'));
+  });
+
+  it('a missing value stays unjudged', () => {
+    expect(onLog([Number.NaN, 10], [10, Number.NaN])).toEqual(['unjudged', 'unjudged']);
+  });
+
+  it('one σ is σ/(x ln 10)', () => {
+    // log10(90) = 1.9542 stands 0.0458 below the edge at 2; 0.0458 · 90 · ln 10 = 9.48.
+    expect(onLog([[90, 9.6]], [10])).toEqual(['borderline']);
+    expect(onLog([[90, 9.4]], [10])).toEqual(['kept']);
+  });
+
+  it('a vertex that is not positive lies at the end of the axis', () => {
+    const open: Vertices = DECADES.map(([x, y]) => [x === 1 ? 0 : x, y]);
+    expect(verdicts(open, [1e-300, 0], [10, 10], { log: true })).toEqual(['kept', 'dropped']);
+  });
+});
