@@ -12,8 +12,8 @@ export interface Judged {
   column(id: string): QuantityColumn | undefined;
   /** See QuantitySet.phaseCovariance. */
   phaseCovariance(): Float64Array | undefined;
-  /** Keeps a costly column (an angle from a plane) until the objects change. */
-  memo<T>(key: string, make: () => T): T;
+  /** Keeps something costly (an angle from a plane) until the objects change, or newer keys of its shelf push it out. */
+  memo<T>(shelf: string, key: string, make: () => T): T;
 }
 
 /**

@@ -27,7 +27,7 @@ export const named: CutKind<Parameters> = {
   proposals: [],
   needs: () => [],
   judge(p, objects) {
-    const rowOf = objects.memo('rows by key', () => new Map(objects.keys.map((key, row) => [key, row])));
+    const rowOf = objects.memo('rows by key', '', () => new Map(objects.keys.map((key, row) => [key, row])));
     const dropped = new Bitset(objects.rows);
     const forced = new Bitset(objects.rows);
     for (const { key, action } of p.objects) {

@@ -23,8 +23,8 @@ const parameters = z.strictObject({
 type Parameters = z.infer<typeof parameters>;
 
 function columnOf(p: Parameters, objects: Judged): ReturnType<typeof planeAngle> {
-  const key = `plane ${p.poleL} ${p.poleB} ${p.measure} ${p.sense}`;
-  return objects.memo(key, () => planeAngle(p, objects));
+  const key = `${p.poleL} ${p.poleB} ${p.measure} ${p.sense}`;
+  return objects.memo('angles from planes', key, () => planeAngle(p, objects));
 }
 
 function measureText(p: Parameters): string {
