@@ -56,8 +56,8 @@ export interface Limit {
 }
 
 /** One kind of cut: everything that shared code must know of it. */
-export interface CutKind<P> {
-  readonly kind: string;
+export interface CutKind<P, Kind extends string = string> {
+  readonly kind: Kind;
   readonly label: string;
   /** One sentence: which contamination the cut is against. */
   readonly purpose: string;

@@ -35,7 +35,7 @@ function limits(p: Parameters): Limit[] {
 }
 
 /** Drops objects that stand or move as the disc does. */
-export const disc: CutKind<Parameters> = {
+export const disc: CutKind<Parameters, 'disc'> = {
   kind: 'disc',
   label: 'Disc contamination',
   purpose: 'Against objects of the thin and thick disc.',

@@ -20,7 +20,7 @@ function limits({ ebvMax, avMax, absBMin }: Parameters): Limit[] {
 const CUSTOM = 'common practice, no source';
 
 /** Keeps objects that are little reddened and far from the Galactic plane on the sky. */
-export const extinction: CutKind<Parameters> = {
+export const extinction: CutKind<Parameters, 'extinction'> = {
   kind: 'extinction',
   label: 'Extinction',
   purpose: 'Against distances that dust has spoilt, crowding, and fields where the catalogue is incomplete.',

@@ -19,7 +19,7 @@ const parameters = z.strictObject({
 type Parameters = z.infer<typeof parameters>;
 
 /** Keeps or drops what lies inside a shape drawn on a plate. */
-export const lasso: CutKind<Parameters> = {
+export const lasso: CutKind<Parameters, 'lasso'> = {
   kind: 'lasso',
   label: 'Lasso',
   purpose: 'Keeps or drops what lies inside a shape that was drawn on a plate.',

@@ -15,7 +15,7 @@ function limits({ min, max }: Parameters): Limit[] {
 }
 
 /** Keeps metal-poor objects. */
-export const metallicity: CutKind<Parameters> = {
+export const metallicity: CutKind<Parameters, 'metallicity'> = {
   kind: 'metallicity',
   label: 'Metallicity',
   purpose: 'Against metal-rich objects of the disc and bulge.',

@@ -17,7 +17,7 @@ const parameters = z.strictObject({
 type Parameters = z.infer<typeof parameters>;
 
 /** Keeps or drops single objects by name; a kept one stays whatever other cuts say. */
-export const named: CutKind<Parameters> = {
+export const named: CutKind<Parameters, 'named'> = {
   kind: 'named',
   label: 'Named objects',
   purpose: 'Decides single objects by eye, each with its reason.',

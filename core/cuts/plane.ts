@@ -41,7 +41,7 @@ function describe(p: Parameters): string {
 }
 
 /** Drops, or keeps alone, the objects of one orbital plane. */
-export const plane: CutKind<Parameters> = {
+export const plane: CutKind<Parameters, 'plane'> = {
   kind: 'plane',
   label: 'Orbit plane',
   purpose: 'Against the members of one coherent stream or plane, which are not independent tracers.',

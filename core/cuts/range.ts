@@ -16,7 +16,7 @@ function limits({ quantity, min, max, absolute }: Parameters): Limit[] {
 }
 
 /** Keeps a range of any quantity, limits included. */
-export const range: CutKind<Parameters> = {
+export const range: CutKind<Parameters, 'range'> = {
   kind: 'range',
   label: 'Range',
   purpose: 'Keeps a range of one quantity: distance, quality, radius, or whatever the job asks for.',
