@@ -12,12 +12,12 @@ export interface Judged {
   column(id: string): QuantityColumn | undefined;
   /** See QuantitySet.phaseCovariance. */
   phaseCovariance(): Float64Array | undefined;
-  /** Keeps a costly column (an angle from a plane) until the objects change. */
-  memo<T>(key: string, make: () => T): T;
+  /** Keeps something costly (an angle from a plane) until the objects change, or newer keys of its shelf push it out. */
+  memo<T>(shelf: string, key: string, make: () => T): T;
 }
 
 /**
- * What one cut says of every object, on four nested bitsets.
+ * What a cut, or one test of it, says of every object, on four nested bitsets.
  *
  * `surely` ⊆ `passes` ⊆ `possibly`: passes even if every value is wrong by the margin against it; passes at
  * best values; passes if the values are wrong by the margin in its favour. `unjudged` objects, whose outcome
@@ -56,8 +56,8 @@ export interface Limit {
 }
 
 /** One kind of cut: everything that shared code must know of it. */
-export interface CutKind<P> {
-  readonly kind: string;
+export interface CutKind<P, Kind extends string = string> {
+  readonly kind: Kind;
   readonly label: string;
   /** One sentence: which contamination the cut is against. */
   readonly purpose: string;
@@ -69,10 +69,12 @@ export interface CutKind<P> {
   /** Quantity ids without which the cut cannot judge anything, for these parameters. */
   needs(parameters: P): readonly string[];
   /**
-   * Judges every object.
+   * Judges every object by each test of the cut on its own; a cut without tests passes everything.
    * @param margin number of σ by which values may be wrong for `surely` and `possibly`; 0 switches it off
    */
-  judge(parameters: P, objects: Judged, margin: number): Outcome;
+  judge(parameters: P, objects: Judged, margin: number): readonly Outcome[];
+  /** Whether an object has to pass every test, or any one of them. */
+  passing(parameters: P): 'every' | 'any';
   /** The cut in words, with units, as a referee would read it: "[Fe/H] ≤ −1.0". */
   describe(parameters: P): string;
   /** Active limits, for drawing. */

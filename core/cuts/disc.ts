@@ -1,5 +1,4 @@
 import { z } from 'zod';
-import { allOf, anyOf, everythingPasses } from './combine';
 import type { CutKind, Limit } from './contract';
 import { judgeLimit, limitOf, limitText } from './limits';
 
@@ -36,7 +35,7 @@ function limits(p: Parameters): Limit[] {
 }
 
 /** Drops objects that stand or move as the disc does. */
-export const disc: CutKind<Parameters> = {
+export const disc: CutKind<Parameters, 'disc'> = {
   kind: 'disc',
   label: 'Disc contamination',
   purpose: 'Against objects of the thin and thick disc.',
@@ -67,11 +66,8 @@ export const disc: CutKind<Parameters> = {
     },
   ],
   needs: (p) => limits(p).map((limit) => limit.quantity),
-  judge(p, objects, margin) {
-    const tests = limits(p).map((limit) => judgeLimit(limit, objects, margin));
-    if (tests.length === 0) return everythingPasses(objects.rows);
-    return p.combine === 'any' ? allOf(objects.rows, tests) : anyOf(objects.rows, tests);
-  },
+  judge: (p, objects, margin) => limits(p).map((limit) => judgeLimit(limit, objects, margin)),
+  passing: (p) => (p.combine === 'any' ? 'every' : 'any'),
   describe: (p) =>
     limits(p)
       .map(limitText)

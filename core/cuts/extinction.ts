@@ -1,5 +1,4 @@
 import { z } from 'zod';
-import { allOf } from './combine';
 import type { CutKind, Limit } from './contract';
 import { judgeLimit, limitOf, limitText } from './limits';
 
@@ -21,7 +20,7 @@ function limits({ ebvMax, avMax, absBMin }: Parameters): Limit[] {
 const CUSTOM = 'common practice, no source';
 
 /** Keeps objects that are little reddened and far from the Galactic plane on the sky. */
-export const extinction: CutKind<Parameters> = {
+export const extinction: CutKind<Parameters, 'extinction'> = {
   kind: 'extinction',
   label: 'Extinction',
   purpose: 'Against distances that dust has spoilt, crowding, and fields where the catalogue is incomplete.',
@@ -37,11 +36,8 @@ export const extinction: CutKind<Parameters> = {
     { parameter: 'absBMin', value: 20, reason: 'crowding and incompleteness at low latitude', source: CUSTOM },
   ],
   needs: (p) => limits(p).map((limit) => limit.quantity),
-  judge: (p, objects, margin) =>
-    allOf(
-      objects.rows,
-      limits(p).map((limit) => judgeLimit(limit, objects, margin)),
-    ),
+  judge: (p, objects, margin) => limits(p).map((limit) => judgeLimit(limit, objects, margin)),
+  passing: () => 'every',
   describe: (p) => limits(p).map(limitText).join(' and ') || 'no limit on dust or latitude',
   limits,
   limitColumn: (limit, _, objects) => objects.column(limit.quantity),

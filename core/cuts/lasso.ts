@@ -1,9 +1,9 @@
 import { z } from 'zod';
-import { Bitset } from '../table/bitset';
-import type { QuantityColumn } from '../quantities/quantity';
+import { onAxis, vertexOn } from './axis';
 import { nothingJudged, opposite } from './combine';
-import type { CutKind, Judged, Outcome } from './contract';
-import { edgesOf, inside, outlineDistance, type Polygon } from './polygon';
+import type { CutKind } from './contract';
+import { judgeInside } from './inside';
+import { outlineOf } from './outline';
 
 const parameters = z.strictObject({
   x: z.string().min(1).describe('Quantity id on the horizontal axis'),
@@ -19,7 +19,7 @@ const parameters = z.strictObject({
 type Parameters = z.infer<typeof parameters>;
 
 /** Keeps or drops what lies inside a shape drawn on a plate. */
-export const lasso: CutKind<Parameters> = {
+export const lasso: CutKind<Parameters, 'lasso'> = {
   kind: 'lasso',
   label: 'Lasso',
   purpose: 'Keeps or drops what lies inside a shape that was drawn on a plate.',
@@ -42,45 +42,17 @@ export const lasso: CutKind<Parameters> = {
   needs: (p) => [p.x, p.y],
   judge(p, objects, margin) {
     const [x, y] = [objects.column(p.x), objects.column(p.y)];
-    if (x === undefined || y === undefined) return nothingJudged(objects.rows);
-    const within = judgeInside(p, objects, x, y, margin);
-    return p.action === 'keep' ? within : opposite(within);
+    if (x === undefined || y === undefined) return [nothingJudged(objects.rows)];
+    const [across, up] = [onAxis(x, p.xLog), onAxis(y, p.yLog)];
+    const points = { x: across.values, y: up.values, sigmaX: across.sigma, sigmaY: up.sigma, margin };
+    const outline = outlineOf(p.polygon.map(([vx, vy]) => [vertexOn(vx, p.xLog), vertexOn(vy, p.yLog)]));
+    const within = judgeInside(outline, points);
+    return [p.action === 'keep' ? within : opposite(within)];
   },
+  passing: () => 'every',
   describe: (p) =>
     `${p.action === 'drop' ? 'drop' : 'keep only'} objects inside a drawn shape of ${p.polygon.length} vertices in ` +
     `${p.x} and ${p.y}`,
   limits: () => [],
   limitColumn: () => undefined,
 };
-
-function judgeInside(p: Parameters, objects: Judged, x: QuantityColumn, y: QuantityColumn, margin: number): Outcome {
-  const [horizontal, vertical] = [axis(p.xLog), axis(p.yLog)];
-  const polygon: Polygon = p.polygon.map(([vx, vy]) => [horizontal.place(vx), vertical.place(vy)]);
-  const edges = edgesOf(polygon);
-  const rows = objects.rows;
-  const [surely, passes, possibly, unjudged] = [new Bitset(rows), new Bitset(rows), new Bitset(rows), new Bitset(rows)];
-  for (let row = 0; row < rows; row++) {
-    const [px, py] = [horizontal.place(x.values[row]!), vertical.place(y.values[row]!)];
-    if (Number.isNaN(px) || Number.isNaN(py)) {
-      unjudged.add(row);
-      continue;
-    }
-    const within = inside(edges, px, py);
-    const sx = horizontal.spread(x.values[row]!, x.sigma?.[row] ?? 0);
-    const sy = vertical.spread(y.values[row]!, y.sigma?.[row] ?? 0);
-    const near = margin > 0 && (sx > 0 || sy > 0) && outlineDistance(edges, px, py, sx, sy) < margin;
-    if (within) passes.add(row);
-    if (within && !near) surely.add(row);
-    if (within || near) possibly.add(row);
-  }
-  return { surely, passes, possibly, unjudged };
-}
-
-/** How values and errors lie on an axis; what is not positive has no place on a logarithmic one. */
-function axis(log: boolean): { place(value: number): number; spread(value: number, sigma: number): number } {
-  if (!log) return { place: (value) => value, spread: (_, sigma) => sigma };
-  return {
-    place: (value) => (value > 0 ? Math.log10(value) : Number.NaN),
-    spread: (value, sigma) => sigma / (value * Math.LN10),
-  };
-}

@@ -1,5 +1,4 @@
 import { z } from 'zod';
-import { allOf } from './combine';
 import type { CutKind, Limit } from './contract';
 import { judgeLimit, limitOf, limitText } from './limits';
 
@@ -16,7 +15,7 @@ function limits({ min, max }: Parameters): Limit[] {
 }
 
 /** Keeps metal-poor objects. */
-export const metallicity: CutKind<Parameters> = {
+export const metallicity: CutKind<Parameters, 'metallicity'> = {
   kind: 'metallicity',
   label: 'Metallicity',
   purpose: 'Against metal-rich objects of the disc and bulge.',
@@ -41,11 +40,8 @@ export const metallicity: CutKind<Parameters> = {
     { parameter: 'max', value: -1.3, reason: 'halo K giants', source: '2019AJ....157..104B' },
   ],
   needs: (p) => (limits(p).length === 0 ? [] : ['feh']),
-  judge: (p, objects, margin) =>
-    allOf(
-      objects.rows,
-      limits(p).map((limit) => judgeLimit(limit, objects, margin)),
-    ),
+  judge: (p, objects, margin) => limits(p).map((limit) => judgeLimit(limit, objects, margin)),
+  passing: () => 'every',
   describe: (p) => limits(p).map(limitText).join(' and ') || 'no limit on [Fe/H]',
   limits,
   limitColumn: (limit, _, objects) => objects.column(limit.quantity),

@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { Bitset } from '../table/bitset';
-import type { CutKind, Outcome } from './contract';
+import type { CutKind } from './contract';
 
 const parameters = z.strictObject({
   objects: z
@@ -17,7 +17,7 @@ const parameters = z.strictObject({
 type Parameters = z.infer<typeof parameters>;
 
 /** Keeps or drops single objects by name; a kept one stays whatever other cuts say. */
-export const named: CutKind<Parameters> = {
+export const named: CutKind<Parameters, 'named'> = {
   kind: 'named',
   label: 'Named objects',
   purpose: 'Decides single objects by eye, each with its reason.',
@@ -26,8 +26,8 @@ export const named: CutKind<Parameters> = {
   defaults: { objects: [] },
   proposals: [],
   needs: () => [],
-  judge(p, objects): Outcome {
-    const rowOf = objects.memo('rows by key', () => new Map(objects.keys.map((key, row) => [key, row])));
+  judge(p, objects) {
+    const rowOf = objects.memo('rows by key', '', () => new Map(objects.keys.map((key, row) => [key, row])));
     const dropped = new Bitset(objects.rows);
     const forced = new Bitset(objects.rows);
     for (const { key, action } of p.objects) {
@@ -35,8 +35,9 @@ export const named: CutKind<Parameters> = {
       if (row !== undefined) (action === 'keep' ? forced : dropped).add(row);
     }
     const passes = dropped.not();
-    return { surely: passes, passes, possibly: passes, unjudged: new Bitset(objects.rows), forced };
+    return [{ surely: passes, passes, possibly: passes, unjudged: new Bitset(objects.rows), forced }];
   },
+  passing: () => 'every',
   describe(p) {
     const list = (action: string): string =>
       p.objects

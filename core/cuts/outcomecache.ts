@@ -1,6 +1,8 @@
+import { allOf, anyOf } from './combine';
 import type { Judged, Outcome } from './contract';
 import type { Cut } from './cut';
 import { cutKind } from './kinds';
+import { settled } from './missing';
 
 /** Remembers the last outcome of every cut, so that a moved limit evaluates one cut. */
 export interface OutcomeCache {
@@ -27,16 +29,9 @@ export function outcomeCache(): OutcomeCache {
   };
 }
 
-/** What one cut says of every object, after its rule for missing values. */
+/** What one cut says of every object; the rule for missing values holds for each of its tests. */
 export function judgeCut(cut: Cut, objects: Judged, margin: number): Outcome {
-  const raw = cutKind(cut.kind).judge(cut.parameters, objects, margin);
-  if (cut.missing === 'unjudged') return raw;
-  const judged = { ...raw, unjudged: raw.unjudged.without(raw.unjudged) };
-  if (cut.missing === 'drop') return judged;
-  return {
-    ...judged,
-    surely: raw.surely.or(raw.unjudged),
-    passes: raw.passes.or(raw.unjudged),
-    possibly: raw.possibly.or(raw.unjudged),
-  };
+  const kind = cutKind(cut.kind);
+  const tests = kind.judge(cut.parameters, objects, margin).map((test) => settled(test, cut.missing));
+  return kind.passing(cut.parameters) === 'every' ? allOf(objects.rows, tests) : anyOf(objects.rows, tests);
 }

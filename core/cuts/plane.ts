@@ -23,8 +23,8 @@ const parameters = z.strictObject({
 type Parameters = z.infer<typeof parameters>;
 
 function columnOf(p: Parameters, objects: Judged): ReturnType<typeof planeAngle> {
-  const key = `plane ${p.poleL} ${p.poleB} ${p.measure} ${p.sense}`;
-  return objects.memo(key, () => planeAngle(p, objects));
+  const key = `${p.poleL} ${p.poleB} ${p.measure} ${p.sense}`;
+  return objects.memo('angles from planes', key, () => planeAngle(p, objects));
 }
 
 function measureText(p: Parameters): string {
@@ -41,7 +41,7 @@ function describe(p: Parameters): string {
 }
 
 /** Drops, or keeps alone, the objects of one orbital plane. */
-export const plane: CutKind<Parameters> = {
+export const plane: CutKind<Parameters, 'plane'> = {
   kind: 'plane',
   label: 'Orbit plane',
   purpose: 'Against the members of one coherent stream or plane, which are not independent tracers.',
@@ -62,10 +62,11 @@ export const plane: CutKind<Parameters> = {
   needs: (p) => (p.measure === 'position' ? ['x', 'y', 'z'] : ['x', 'y', 'z', 'v_x', 'v_y', 'v_z']),
   judge(p, objects, margin) {
     const column = columnOf(p, objects);
-    if (column === undefined) return nothingJudged(objects.rows);
+    if (column === undefined) return [nothingJudged(objects.rows)];
     const inside = judgeThreshold(column, { limit: p.angleMax, keeps: 'below', absolute: false }, margin);
-    return p.action === 'keep' ? inside : opposite(inside);
+    return [p.action === 'keep' ? inside : opposite(inside)];
   },
+  passing: () => 'every',
   describe,
   limits: (p): Limit[] => [
     {

@@ -1,5 +1,4 @@
 import { z } from 'zod';
-import { allOf } from './combine';
 import type { CutKind, Limit } from './contract';
 import { judgeLimit, limitOf, limitText } from './limits';
 
@@ -17,7 +16,7 @@ function limits({ quantity, min, max, absolute }: Parameters): Limit[] {
 }
 
 /** Keeps a range of any quantity, limits included. */
-export const range: CutKind<Parameters> = {
+export const range: CutKind<Parameters, 'range'> = {
   kind: 'range',
   label: 'Range',
   purpose: 'Keeps a range of one quantity: distance, quality, radius, or whatever the job asks for.',
@@ -26,11 +25,8 @@ export const range: CutKind<Parameters> = {
   defaults: { quantity: 'r', min: null, max: null, absolute: false },
   proposals: [],
   needs: (p) => [p.quantity],
-  judge: (p, objects, margin) =>
-    allOf(
-      objects.rows,
-      limits(p).map((limit) => judgeLimit(limit, objects, margin)),
-    ),
+  judge: (p, objects, margin) => limits(p).map((limit) => judgeLimit(limit, objects, margin)),
+  passing: () => 'every',
   describe: (p) => limits(p).map(limitText).join(' and ') || `no limit on ${p.quantity}`,
   limits,
   limitColumn: (limit, _, objects) => objects.column(limit.quantity),

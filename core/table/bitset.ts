@@ -90,7 +90,8 @@ export class Bitset {
   }
 }
 
-function popcount(word: number): number {
+/** How many bits of a word are set; the word may be signed. */
+export function popcount(word: number): number {
   let v = word - ((word >>> 1) & 0x55555555);
   v = (v & 0x33333333) + ((v >>> 2) & 0x33333333);
   return Math.imul((v + (v >>> 4)) & 0x0f0f0f0f, 0x01010101) >>> 24;

@@ -4,9 +4,10 @@ import { judgedObjects } from '../../../core/cuts/judged';
 import type { Judged } from '../../../core/cuts/contract';
 import type { QuantityColumn } from '../../../core/quantities/quantity';
 
-/** Objects with given columns: a list of values, or of [value, sigma]. */
+/** Objects with given columns: a list of values, or of [value, sigma]; and their phase covariance, 21 numbers each. */
 export function objectsWith(
   columns: Readonly<Record<string, readonly (number | readonly [number, number])[]>>,
+  covariance?: Float64Array,
 ): Judged {
   const made = new Map<string, QuantityColumn>();
   let rows = 0;
@@ -17,7 +18,7 @@ export function objectsWith(
     made.set(id, { values, sigma });
   }
   const names = Array.from({ length: rows }, (_, row) => `Object ${row}`);
-  const quantities = { rows, definitions: [], column: (id: string) => made.get(id), phaseCovariance: () => undefined };
+  const quantities = { rows, definitions: [], column: (id: string) => made.get(id), phaseCovariance: () => covariance };
   return judgedObjects(
     quantities,
     names,
