@@ -209,8 +209,8 @@ export interface DensityAsk {
   readonly y: string;
   readonly columns: number;
   readonly rows: number;
-  /** Window in data coordinates; the full range when left out. */
-  readonly range?: { readonly x: readonly [number, number]; readonly y: readonly [number, number] };
+  /** Window in data coordinates. */
+  readonly range: { readonly x: readonly [number, number]; readonly y: readonly [number, number] };
 }
 
 export interface Density {

@@ -1,5 +1,4 @@
 import type { Density, DensityAsk } from '../contract/messages';
-import { robustRange } from './histogram';
 import type { Session } from './session';
 
 /** Counts of all objects and of the sample on a grid over two quantities; undefined when one is not there. */
@@ -7,7 +6,7 @@ export function plateDensity(session: Session, ask: DensityAsk): Density | undef
   const { prepared, result } = session;
   const [x, y] = [prepared.quantities.column(ask.x)?.values, prepared.quantities.column(ask.y)?.values];
   if (!x || !y) return undefined;
-  const [rangeX, rangeY] = [ask.range?.x ?? robustRange(x), ask.range?.y ?? robustRange(y)];
+  const { x: rangeX, y: rangeY } = ask.range;
   const all = new Float64Array(ask.columns * ask.rows);
   const sample = new Float64Array(all.length);
   const scaleX = ask.columns / (rangeX[1] - rangeX[0] || 1);

@@ -1,32 +1,69 @@
 import type { Density } from '../../contract/messages';
+import type { AxisLayout } from './types';
+import { prepared } from './canvas';
 
-/** Counts as a heat map in log10, the sample over everything: paper to ink, so that dense is dark (or light at night). */
-export function densityTrace(density: Density, dark: boolean): object {
-  const { columns, rows, all, sample, x, y } = density;
-  const row = (line: number): (number | null)[] =>
-    Array.from({ length: columns }, (_, column) => {
-      const cell = line * columns + column;
-      // The sample counts fully, what was dropped at a tenth, so that the kept stand out.
-      const weight = sample[cell]! + 0.1 * (all[cell]! - sample[cell]!);
-      return all[cell] === 0 ? null : Math.log10(1 + 10 * weight);
-    });
-  return {
-    type: 'heatmap',
-    x0: x[0] + (x[1] - x[0]) / columns / 2,
-    dx: (x[1] - x[0]) / columns,
-    y0: y[0] + (y[1] - y[0]) / rows / 2,
-    dy: (y[1] - y[0]) / rows,
-    z: Array.from({ length: rows }, (_, line) => row(line)),
-    colorscale: dark
-      ? [
-          [0, '#3a3833'],
-          [1, '#f3ecdc'],
-        ]
-      : [
-          [0, '#dcd4c2'],
-          [1, '#1d1b17'],
-        ],
-    showscale: false,
-    hoverinfo: 'skip',
-  };
+type Colour = readonly [number, number, number];
+
+/** From paper to ink, so that dense is dark by day and light at night. */
+const SCALES: Readonly<Record<'light' | 'dark', readonly [Colour, Colour]>> = {
+  light: [
+    [220, 212, 194],
+    [29, 27, 23],
+  ],
+  dark: [
+    [58, 56, 51],
+    [243, 236, 220],
+  ],
+};
+/** What an object outside the sample counts, so that the kept stand out. */
+const OUTSIDE = 0.1;
+
+/** Draws counts as shades, logarithmic, an empty cell transparent. */
+export function drawDensity(
+  canvas: HTMLCanvasElement,
+  density: Density,
+  axes: { x: AxisLayout; y: AxisLayout },
+  dark: boolean,
+): void {
+  const context = prepared(canvas);
+  const image = context && shades(density, dark);
+  if (!image) return;
+  const { x: ax, y: ay } = axes;
+  context.beginPath();
+  context.rect(ax._offset, ay._offset, ax._length, ay._length);
+  context.clip();
+  context.imageSmoothingEnabled = false;
+  const [left, right] = density.x.map((value) => ax._offset + ax.d2p(value)) as [number, number];
+  const [bottom, top] = density.y.map((value) => ay._offset + ay.d2p(value)) as [number, number];
+  context.drawImage(image, left, top, right - left, bottom - top);
+  context.restore();
+}
+
+/** The densest cell's count, for the legend. */
+export function densest({ all }: Density): number {
+  let most = 0;
+  for (const count of all) if (count > most) most = count;
+  return most;
+}
+
+/** One pixel a cell, the first row at the top. */
+function shades({ columns, rows, all, sample }: Density, dark: boolean): HTMLCanvasElement | undefined {
+  const image = document.createElement('canvas');
+  [image.width, image.height] = [columns, rows];
+  const context = image.getContext('2d');
+  if (!context) return undefined;
+  const pixels = context.createImageData(columns, rows);
+  const weight = (cell: number): number => Math.log1p(sample[cell]! + OUTSIDE * (all[cell]! - sample[cell]!));
+  let most = 0;
+  for (let cell = 0; cell < all.length; cell++) most = Math.max(most, weight(cell));
+  const [low, high] = SCALES[dark ? 'dark' : 'light'];
+  for (let cell = 0; cell < all.length; cell++) {
+    if (all[cell] === 0) continue;
+    const at = 4 * ((rows - 1 - Math.floor(cell / columns)) * columns + (cell % columns));
+    const share = most > 0 ? weight(cell) / most : 0;
+    for (let part = 0; part < 3; part++) pixels.data[at + part] = low[part]! + share * (high[part]! - low[part]!);
+    pixels.data[at + 3] = 255;
+  }
+  context.putImageData(pixels, 0, 0);
+  return image;
 }

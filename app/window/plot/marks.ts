@@ -1,3 +1,4 @@
+import { prepared } from './canvas';
 import type { AxisLayout } from './types';
 
 /** Colours of a plate, read from the style sheet. */
@@ -98,17 +99,6 @@ export function nearest(
     if (square < least) [best, least] = [row, square];
   }
   return best;
-}
-
-function prepared(canvas: HTMLCanvasElement): CanvasRenderingContext2D | null {
-  const context = canvas.getContext('2d');
-  const scale = window.devicePixelRatio;
-  const [width, height] = [canvas.clientWidth * scale, canvas.clientHeight * scale];
-  if (canvas.width !== width || canvas.height !== height) [canvas.width, canvas.height] = [width, height];
-  context?.setTransform(scale, 0, 0, scale, 0, 0);
-  context?.clearRect(0, 0, canvas.clientWidth, canvas.clientHeight);
-  context?.save();
-  return context;
 }
 
 function markSize(count: number): number {

@@ -1,12 +1,10 @@
 import core from 'plotly.js/lib/core';
-import heatmap from 'plotly.js/lib/heatmap';
 import type { Drawn, PlotElement, PlotlyCore } from './types';
 
 const Plotly = core as PlotlyCore;
 
-// plotly lays out axes, zoom and the drawing of shapes; the marks are drawn by us, because redrawing its own marks
-// takes tens of milliseconds a plate. The heat map is there for plates of very many objects.
-Plotly.register([heatmap]);
+// plotly lays out axes, zoom and the drawing of shapes; marks and shades are drawn by us, because redrawing its own
+// takes tens of milliseconds a plate.
 
 const CONFIG = {
   displaylogo: false,
@@ -29,8 +27,6 @@ export interface PlateLook {
   readonly ink: string;
   readonly rule: string;
   readonly font: string;
-  /** Counts to draw as a heat map, or none. */
-  readonly density: object | undefined;
 }
 
 /** Lays out a plate, or lays it out anew. */
@@ -71,7 +67,7 @@ export function layPlate(element: HTMLElement, look: PlateLook): Promise<PlotEle
     uirevision: `${look.xTitle} ${look.yTitle}`,
     newselection: { line: { color: look.ink, width: 1.2, dash: 'dot' } },
   };
-  return Plotly.react(element, look.density ? [look.density] : [corners], layout, CONFIG);
+  return Plotly.react(element, [corners], layout, CONFIG);
 }
 
 /** Calls back when a lasso or box was drawn on the plate, with its corners in data coordinates. */
