@@ -1,9 +1,6 @@
 /** Kilometres per second for one milliarcsecond per year at one kiloparsec (IAU 2012 B2 au, Julian year). */
 export const KM_S_PER_MAS_YR_KPC = 4.740470463533348;
 
-/** Parsecs in a light-year (IAU). */
-export const PC_PER_LIGHT_YEAR = 0.306601393788;
-
 /** Radians in a degree. */
 export const RAD = Math.PI / 180;
 

@@ -1,6 +1,7 @@
 /** Kinds of unit that the tool converts between. */
 export type Dimension =
   | 'angle'
+  | 'parallax'
   | 'length'
   | 'magnitude'
   | 'proper motion'

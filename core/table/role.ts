@@ -66,7 +66,7 @@ export const MEASURED: readonly MeasuredDefinition[] = [
     'heliocentric distance as measured',
   ),
   row('distance_modulus', 'distance modulus', 'mag', 'magnitude', -5, 35, 'phot.mag.distMod', 'true distance modulus'),
-  row('parallax', 'parallax', 'mas', 'angle', -100, 1000, 'pos.parallax.trig', 'trigonometric parallax'),
+  row('parallax', 'parallax', 'mas', 'parallax', -100, 1000, 'pos.parallax.trig', 'trigonometric parallax'),
   row(
     'pm_ra',
     'proper motion in right ascension',

@@ -43,8 +43,8 @@ const SYMBOLS: Readonly<Record<string, Unit>> = {
   pc: length(KPC_KM / 1000),
   kpc: length(KPC_KM),
   mpc: length(KPC_KM * 1000),
-  ly: length(0.306601393788 * (KPC_KM / 1000)),
-  kly: length(306.601393788 * (KPC_KM / 1000)),
+  ly: length(9.4607304725808e12),
+  kly: length(9.4607304725808e15),
   s: time(1),
   sec: time(1),
   yr: time(YEAR_S),
@@ -59,6 +59,7 @@ const SYMBOLS: Readonly<Record<string, Unit>> = {
 /** Base dimensions and the size of the canonical unit, in base units, of every dimension. */
 const CANONICAL: Readonly<Partial<Record<Dimension, Unit>>> = {
   angle: angle(1),
+  parallax: angle(1 / 3.6e6),
   length: length(KPC_KM),
   magnitude: unit(1, { mag: 1 }),
   'proper motion': unit(1 / 3.6e6 / YEAR_S, { angle: 1, time: -1 }),
@@ -73,6 +74,7 @@ const UNITLESS = new Set(['', '-', '[-]', '---', 'none', 'dimensionless', '1']);
 /** Units offered for each dimension; the first is the canonical one. */
 export const COMMON_UNITS: Readonly<Partial<Record<Dimension, readonly string[]>>> = {
   angle: ['deg', 'rad', 'hourangle', 'arcmin', 'arcsec', 'mas', 'h:m:s', 'd:m:s'],
+  parallax: ['mas', 'uas', 'arcsec'],
   length: ['kpc', 'pc', 'Mpc', 'ly'],
   magnitude: ['mag'],
   'proper motion': ['mas/yr', 'arcsec/yr', 'uas/yr', 'arcsec/century'],
@@ -85,7 +87,7 @@ export const COMMON_UNITS: Readonly<Partial<Record<Dimension, readonly string[]>
 export const SEXAGESIMAL = new Set(['h:m:s', 'd:m:s']);
 
 /**
- * Factor from a unit to the canonical unit of its dimension (deg, kpc, mag, mas/yr, km/s); undefined when the unit is
+ * Factor from a unit to the canonical unit of its dimension (deg, mas for parallaxes, kpc, mag, mas/yr, km/s); undefined when the unit is
  * not understood or of another dimension.
  *
  * Reads what tables hold: products with '.', '*' or blanks, one or more '/', powers as '**n', '^n', or a sign and
@@ -122,6 +124,7 @@ function parseUnit(text: string): Unit | undefined {
     .replace(/\s*\/\s*/g, ' / ')
     .split(/[\s.*]+/)) {
     if (token === '/') {
+      if (divide) return undefined;
       divide = true;
       continue;
     }
