@@ -1,7 +1,7 @@
 // Runs every bench beside its peer: npm run bench [-- NAME]. Each is bundled as the product is and has its own process.
 import { execFileSync } from 'node:child_process';
-import { mkdtempSync, readdirSync, rmSync } from 'node:fs';
-import { cpus, tmpdir } from 'node:os';
+import { readdirSync, rmSync } from 'node:fs';
+import { cpus } from 'node:os';
 import { join } from 'node:path';
 import { build } from 'vite';
 
@@ -10,7 +10,8 @@ const names = readdirSync(import.meta.dirname)
   .filter((file) => file.endsWith('.bench.ts'))
   .map((file) => file.replace('.bench.ts', ''))
   .filter((name) => only === undefined || name === only);
-const outDir = mkdtempSync(join(tmpdir(), 'halosieve-bench-'));
+// Beside the packages, so that the bundles find them.
+const outDir = join(import.meta.dirname, '../../node_modules/.halosieve-bench');
 try {
   await build({
     configFile: false,
