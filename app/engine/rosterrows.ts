@@ -1,4 +1,5 @@
 import { VERDICTS } from '../../core/cuts/result';
+import { cleanName } from '../../core/roster/cleanname';
 import type { RosterAsk, RosterPage } from '../contract/messages';
 import type { Session } from './session';
 
@@ -8,10 +9,13 @@ export function rosterRows(session: Session, ask: RosterAsk): RosterPage {
   const { verdicts } = session.result;
   const wanted = new Set(ask.verdicts.map((verdict) => VERDICTS.findIndex((known) => known === verdict)));
   const search = ask.search.trim().toLowerCase();
+  const key = cleanName(search);
   const chosen = sortedOrder(session, ask).filter(
     (row) =>
       (wanted.size === 0 || wanted.has(verdicts[row]!)) &&
-      (search === '' || roster.names[row]!.toLowerCase().includes(search)),
+      (search === '' ||
+        roster.names[row]!.toLowerCase().includes(search) ||
+        (key !== '' && roster.keys[row]!.includes(key))),
   );
   const objects = chosen.slice(ask.offset, ask.offset + ask.count);
   const list = Array.from(objects);
@@ -30,25 +34,32 @@ export function rosterRows(session: Session, ask: RosterAsk): RosterPage {
   };
 }
 
-/** Order of one session by a key, kept because a window asks for one page after another. */
-const kept = new WeakMap<Session, { key: string; order: Int32Array }>();
+/** The last order of some objects, or of what a ledger says of them; a window asks for one page after another. */
+const kept = new WeakMap<object, { key: string; order: Int32Array }>();
 
 function sortedOrder(session: Session, { sort, descending }: RosterAsk): Int32Array {
+  // A moved limit changes verdicts only: names and quantities keep their order.
+  const of = sort === 'verdict' ? session.result : session.prepared;
   const key = `${sort} ${descending}`;
-  const known = kept.get(session);
+  const known = kept.get(of);
   if (known?.key === key) return known.order;
   const { roster, quantities } = session.prepared;
-  const order = Int32Array.from(roster.names, (_, row) => row);
+  const order = Int32Array.from(roster.keys, (_, row) => row);
   const turn = descending ? -1 : 1;
   if (sort === 'name') {
-    const collator = new Intl.Collator('en', { numeric: true });
-    order.sort((a, b) => turn * collator.compare(roster.names[a]!, roster.names[b]!));
+    const words = roster.keys.map(countable);
+    order.sort((a, b) => (words[a]! < words[b]! ? -turn : words[a]! > words[b]! ? turn : a - b));
   } else {
     const values = sort === 'verdict' ? Float64Array.from(session.result.verdicts) : quantities.column(sort)?.values;
     if (values) order.sort((a, b) => compare(values[a]!, values[b]!, turn));
   }
-  kept.set(session, { key, order });
+  kept.set(of, { key, order });
   return order;
+}
+
+/** A key whose numbers stand in their order: every run of digits behind its length. A collator takes four times as long. */
+function countable(key: string): string {
+  return key.replace(/\d+/g, (digits) => String.fromCharCode(0x30 + digits.length) + digits);
 }
 
 function compare(a: number, b: number, turn: number): number {

@@ -77,6 +77,66 @@ describe.skipIf(!hasChromium)('the bench in a real browser', () => {
     expect(sum).toBe(180);
   });
 
+  it('does the whole job with keys alone', async () => {
+    const tabTo = async (selector: string): Promise<void> => {
+      for (let presses = 0; presses < 400; presses++) {
+        await page.keyboard.press('Tab');
+        if (await page.evaluate((wanted) => document.activeElement?.matches(wanted) ?? false, selector)) return;
+      }
+      throw new Error(`Tab never reached ${selector}`);
+    };
+    await limit(/Fe\/H/).waitFor();
+    const before = await figure('dropped');
+    await tabTo('[role=slider][aria-label="Limit on [Fe/H]"]');
+    await page.keyboard.press('PageDown');
+    await expect.poll(() => figure('dropped')).toBeGreaterThan(before);
+    await tabTo('textarea');
+    await page.keyboard.press('Control+End');
+    await page.keyboard.type(' Moved by a key.');
+    const moved = await figure('dropped');
+    await tabTo('input[type=search]');
+    await page.keyboard.type('Brévane 12');
+    await expect.poll(() => page.locator('.roster tbody tr[tabindex]').count()).toBe(1);
+    await tabTo('.roster tbody tr');
+    await page.keyboard.press('Enter');
+    await tabTo('input[placeholder=Reason]');
+    await page.keyboard.type('Blended with a neighbour.');
+    await page
+      .getByRole('complementary', { name: /^Object / })
+      .getByRole('button', { name: 'Drop' })
+      .focus();
+    await page.keyboard.press('Enter');
+    await expect.poll(() => figure('dropped')).toBe(moved + 1);
+    await tabTo('.strip button.strong');
+    await page.keyboard.press('Enter');
+    await page.getByRole('dialog').waitFor();
+    await tabTo('dialog button.strong');
+    await page.keyboard.press('Enter');
+    await expect.poll(() => page.getByRole('dialog').getByRole('status').textContent()).toMatch(/Edition 1 is written/);
+    const frozen = readFileSync(join(place.folder, 'samples/editions/edition-1/recipe.halosieve.json'), 'utf8');
+    expect(frozen).toMatch(/Moved by a key\./);
+    expect(frozen).toMatch(/Blended with a neighbour\./);
+    expect(faults).toEqual([]);
+  });
+
+  it('draws axes in the colours of the look at once when it changes', async () => {
+    const label = page.locator('.plate .xtick text').first();
+    await label.waitFor();
+    const ink = (): Promise<string> =>
+      label.evaluate((text) => {
+        const probe = document.createElement('i');
+        probe.style.color = 'var(--ink-soft)';
+        document.body.append(probe);
+        const wanted = getComputedStyle(probe).color;
+        probe.remove();
+        return getComputedStyle(text).fill === wanted ? 'of the look' : `${getComputedStyle(text).fill}, not ${wanted}`;
+      });
+    for (const look of ['dark', 'light']) {
+      await page.getByLabel('Light or dark').selectOption(look);
+      await expect.poll(ink).toBe('of the look');
+    }
+  });
+
   it('turns a lasso into a cut in data coordinates', async () => {
     const count = await cards().count();
     const sheet = (await page.locator('.sheet').first().boundingBox())!;
