@@ -16,28 +16,40 @@ export function cutHistogram(session: Session, cutId: string, parameter: string,
   const limit = kind.limits(cut.parameters).find((candidate) => candidate.parameter === parameter);
   const column = limit && kind.limitColumn(limit, cut.parameters, prepared.objects);
   if (!limit || !column) return undefined;
-  const values = limit.absolute ? column.values.map(Math.abs) : column.values;
+  const { values } = column;
   let reaching = Bitset.full(prepared.objects.rows);
   result.outcomes.slice(0, at).forEach((outcome, earlier) => {
     if (recipe.ledger[earlier]!.on) reaching = reaching.and(outcome.passes.or(outcome.unjudged));
   });
-  const [min, max] = rangeWith(robustRange(values), limit.value);
+  const [min, max] = rangeWith(robustRange(values, limit.absolute), limit.value);
   const all = new Float64Array(bins);
   const left = new Float64Array(bins);
   let missing = 0;
-  values.forEach((value, row) => {
+  for (let row = 0; row < values.length; row++) {
+    const value = limit.absolute ? Math.abs(values[row]!) : values[row]!;
     if (Number.isNaN(value)) missing++;
     else {
       const bin = Math.min(bins - 1, Math.max(0, Math.floor(((value - min) / (max - min)) * bins)));
       all[bin]!++;
       if (reaching.has(row)) left[bin]!++;
     }
-  });
+  }
   return { min, max, all, reaching: left, missing };
 }
 
-/** Range of the finite values without their outermost tails. */
-export function robustRange(values: Float64Array): [number, number] {
+/** Ranges that were found, by column and sign: a moved limit leaves columns as they are, and sorting a million values takes long. */
+const found = new WeakMap<Float64Array, Map<boolean, [number, number]>>();
+
+/** Range of the finite values, or of their sizes, without their outermost tails. */
+function robustRange(values: Float64Array, absolute: boolean): [number, number] {
+  const known = found.get(values) ?? new Map<boolean, [number, number]>();
+  found.set(values, known);
+  const range = known.get(absolute) ?? newRange(absolute ? values.map(Math.abs) : values);
+  known.set(absolute, range);
+  return range;
+}
+
+function newRange(values: Float64Array): [number, number] {
   const finite = values.filter(Number.isFinite).sort();
   if (finite.length === 0) return [0, 1];
   const last = finite.length - 1;
