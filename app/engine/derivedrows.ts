@@ -2,6 +2,7 @@ import type { RowBytes } from '../../core/formats/csv/rowbytes';
 import { deriveQuantities, type DeriveOptions } from '../../core/quantities/derive';
 import type { QuantityColumn } from '../../core/quantities/quantity';
 import { DERIVED } from '../../core/quantities/registry';
+import { columnPool } from '../../core/table/columnpool';
 import { type MeasuredTable, measuredRows } from '../../core/table/measured';
 
 /** Rows derived at once: few enough for the processor's cache, whatever the size of the table. */
@@ -15,13 +16,15 @@ export const DERIVED_NAMES: readonly string[] = DERIVED.flatMap(({ id }) => [id,
  * derived block by block, so that a table of any size needs no more memory than its own.
  */
 export function derivedRows(measured: MeasuredTable, options: DeriveOptions): (row: number, to: RowBytes) => void {
+  const pool = columnPool();
   let [from, end] = [0, 0];
   let columns: readonly (QuantityColumn | undefined)[] = [];
   return (row, to) => {
     if (row >= end) {
       from = row;
       end = Math.min(measured.rows, row + ROWS_AT_ONCE);
-      const block = deriveQuantities(measuredRows(measured, from, end), options);
+      pool.reset();
+      const block = deriveQuantities(measuredRows(measured, from, end), { ...options, make: pool.make });
       columns = DERIVED.map(({ id }) => block.column(id));
     }
     for (const column of columns) {

@@ -1,3 +1,4 @@
+import { freshColumn } from '../table/columnpool';
 import { KM_S_PER_MAS_YR_KPC, RAD } from './constants';
 import { galactocentric } from './galactocentric';
 import type { Observed } from './phase';
@@ -26,10 +27,15 @@ export const TRIANGLE = 21;
  * A missing position error counts as 0. A missing distance error makes everything NaN that depends on the distance; a
  * missing velocity error leaves the position block as it is. The frame is taken as exact.
  */
-export function phaseCovariance(observed: Observed, errors: ObservedErrors, frame: SolarFrame): Float64Array {
+export function phaseCovariance(
+  observed: Observed,
+  errors: ObservedErrors,
+  frame: SolarFrame,
+  make = freshColumn,
+): Float64Array {
   const { rotation } = galactocentric(frame);
   const { sky } = observed;
-  const packed = new Float64Array(TRIANGLE * sky.rows);
+  const packed = make(TRIANGLE * sky.rows);
   const basis = new Float64Array(9);
   const jacobian = new Float64Array(36);
   const scaled = new Float64Array(36);

@@ -1,3 +1,4 @@
+import { freshColumn } from '../table/columnpool';
 import { KM_S_PER_MAS_YR_KPC } from './constants';
 import { type Galactocentric, galactocentric } from './galactocentric';
 import { type Sky, skyBasis } from './sky';
@@ -26,9 +27,9 @@ export interface Phase {
 }
 
 /** Turns observed columns into Galactocentric ones (see `galactocentric` for axes and definition). */
-export function phaseOf(observed: Observed, frame: SolarFrame): Phase {
+export function phaseOf(observed: Observed, frame: SolarFrame, make = freshColumn): Phase {
   const { rows } = observed.sky;
-  const column = (): Float64Array => new Float64Array(rows);
+  const column = (): Float64Array => make(rows);
   const phase = {
     rows,
     x: column(),

@@ -1,3 +1,4 @@
+import { freshColumn } from '../table/columnpool';
 import type { Rotation } from './rotation';
 import { sinCosDeg } from './trigonometry';
 
@@ -11,9 +12,9 @@ export interface Sky {
 }
 
 /** ICRS directions in degrees, one per row; NaN is missing and spreads. */
-export function skyOf(raDeg: Float64Array, decDeg: Float64Array): Sky {
+export function skyOf(raDeg: Float64Array, decDeg: Float64Array, make = freshColumn): Sky {
   const rows = raDeg.length;
-  const column = (): Float64Array => new Float64Array(rows);
+  const column = (): Float64Array => make(rows);
   const sky = { rows, sinRa: column(), cosRa: column(), sinDec: column(), cosDec: column() };
   sinCosDeg(raDeg, sky.sinRa, sky.cosRa);
   sinCosDeg(decDeg, sky.sinDec, sky.cosDec);

@@ -2,6 +2,7 @@ import { phaseCovariance } from '../frame/covariance';
 import { phaseOf, type Observed, type Phase } from '../frame/phase';
 import { type Sky, skyOf } from '../frame/sky';
 import type { SolarFrame } from '../frame/solarframes';
+import { freshColumn, type MakeColumn } from '../table/columnpool';
 import type { NumberColumn } from '../table/column';
 import type { MeasuredTable } from '../table/measured';
 import type { MeasuredId } from '../table/role';
@@ -23,6 +24,8 @@ const KERNELS: Readonly<Record<string, Kernel>> = { ...POSITION_KERNELS, ...VELO
 
 export interface DeriveOptions extends ExtinctionLaw {
   readonly frame: SolarFrame;
+  /** Where columns come from; each is its own when left out. */
+  readonly make?: MakeColumn;
   /** Further columns, carried along under their own names. */
   readonly extras?: readonly NumberColumn[];
 }
@@ -34,7 +37,7 @@ export interface DeriveOptions extends ExtinctionLaw {
  * linearly through the full 6 × 6 covariance (see `phaseCovariance`); the frame is taken as exact.
  */
 export function deriveQuantities(measured: MeasuredTable, options: DeriveOptions): QuantitySet {
-  const state = lazyState(measured, options.frame);
+  const state = lazyState(measured, options.frame, options.make ?? freshColumn);
   const extras = new Map((options.extras ?? []).map((column) => [column.name, column]));
   const columns = new Map<string, QuantityColumn | undefined>();
 
@@ -80,7 +83,7 @@ function fromKernel(kernel: Kernel, state: State): QuantityColumn | undefined {
   if (!there) return undefined;
   const covariance = state.covariance();
   const values = kernel.values(there);
-  return { values, sigma: covariance && sigmasOf(kernel.gradient(there), kernel.moving, covariance) };
+  return { values, sigma: covariance && sigmasOf(kernel.gradient(there), kernel.moving, covariance, there.make) };
 }
 
 function carried(column: NumberColumn): QuantityDefinition {
@@ -112,13 +115,13 @@ interface State {
   covariance(): Float64Array | undefined;
 }
 
-function lazyState(measured: MeasuredTable, frame: SolarFrame): State {
+function lazyState(measured: MeasuredTable, frame: SolarFrame, make: MakeColumn): State {
   const values = (id: MeasuredId): Float64Array | undefined => measured.columns.get(id)?.values;
   const sigma = (id: MeasuredId): Float64Array | undefined => measured.columns.get(id)?.sigma;
-  const distance = once(() => heliocentricDistance(measured));
+  const distance = once(() => heliocentricDistance(measured, make));
   const sky = once((): Sky | undefined => {
     const [ra, dec] = [values('ra'), values('dec')];
-    return ra && dec && skyOf(ra, dec);
+    return ra && dec && skyOf(ra, dec, make);
   });
   const observed = once((): Observed | undefined => {
     const [directions, far] = [sky(), distance()];
@@ -135,11 +138,11 @@ function lazyState(measured: MeasuredTable, frame: SolarFrame): State {
     distance,
     galactic: once(() => {
       const directions = sky();
-      return directions && galacticColumns(directions, sigma('ra'), sigma('dec'));
+      return directions && galacticColumns(directions, sigma('ra'), sigma('dec'), make);
     }),
     galactocentric: once(() => {
       const seen = observed();
-      return seen && stateOf(phaseOf(seen, frame));
+      return seen && stateOf(phaseOf(seen, frame, make), make);
     }),
     covariance: once(() => {
       const [seen, far] = [observed(), distance()?.sigma];
@@ -153,15 +156,15 @@ function lazyState(measured: MeasuredTable, frame: SolarFrame): State {
         pmCorrelation: values('pm_correlation'),
         vLos: sigma('v_los'),
       };
-      return phaseCovariance(seen, errors, frame);
+      return phaseCovariance(seen, errors, frame, make);
     }),
   };
 }
 
-function stateOf(phase: Phase): GalactocentricState {
-  const places = once(() => placesOf(phase));
-  const momenta = once(() => momentaOf(phase));
-  return { phase, places, momenta, motions: once(() => motionsOf(phase, places(), momenta())) };
+function stateOf(phase: Phase, make: MakeColumn): GalactocentricState {
+  const places = once(() => placesOf(phase, make));
+  const momenta = once(() => momentaOf(phase, make));
+  return { phase, make, places, momenta, motions: once(() => motionsOf(phase, places(), momenta(), make)) };
 }
 
 function once<T>(make: () => T): () => T {

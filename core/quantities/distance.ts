@@ -1,3 +1,4 @@
+import { freshColumn } from '../table/columnpool';
 import type { MeasuredColumn, MeasuredTable } from '../table/measured';
 import { givesDistance } from '../table/parallax';
 import type { QuantityColumn } from './quantity';
@@ -9,13 +10,13 @@ import type { QuantityColumn } from './quantity';
  * d = 1/ϖ, σ_d = d² σ_ϖ, and only for ϖ ≥ 5 σ_ϖ, because the inverse of a noisy parallax is biased. Distances that are
  * not positive are missing.
  */
-export function heliocentricDistance(table: MeasuredTable): QuantityColumn | undefined {
+export function heliocentricDistance(table: MeasuredTable, make = freshColumn): QuantityColumn | undefined {
   const [modulus, direct, parallax] = (['distance_modulus', 'distance', 'parallax'] as const).map((id) =>
     table.columns.get(id),
   );
   if (!modulus && !direct && !parallax) return undefined;
-  const values = new Float64Array(table.rows).fill(Number.NaN);
-  const sigma = new Float64Array(table.rows).fill(Number.NaN);
+  const values = make(table.rows).fill(Number.NaN);
+  const sigma = make(table.rows).fill(Number.NaN);
   // From the last choice to the first.
   if (parallax) fromParallax(parallax, values, sigma);
   if (direct) fromDistance(direct, values, sigma);

@@ -1,3 +1,4 @@
+import { freshColumn, type MakeColumn } from '../table/columnpool';
 import { GALACTIC_FROM_ICRS } from '../frame/galactic';
 import { type Sky, skyBasis, turnedSky } from '../frame/sky';
 import { atan2Deg, turnPositive } from '../frame/trigonometry';
@@ -11,21 +12,27 @@ export function galacticColumns(
   sky: Sky,
   sigmaRa: Float64Array | undefined,
   sigmaDec: Float64Array | undefined,
+  make = freshColumn,
 ): { l: QuantityColumn; b: QuantityColumn } {
-  const [l, b] = [new Float64Array(sky.rows), new Float64Array(sky.rows)];
-  const [x, level] = [new Float64Array(sky.rows), new Float64Array(sky.rows)];
+  const [l, b] = [make(sky.rows), make(sky.rows)];
+  const [x, level] = [make(sky.rows), make(sky.rows)];
   // Longitudes and latitudes take the place of y and z.
   turnedSky(GALACTIC_FROM_ICRS, sky, x, l, b);
   for (let row = 0; row < sky.rows; row++) level[row] = Math.sqrt(x[row]! * x[row]! + l[row]! * l[row]!);
   atan2Deg(b, level, b);
   atan2Deg(l, x, l);
   turnPositive(l);
-  const errors = sigmaRa && sigmaDec && galacticErrors(sky, sigmaRa, sigmaDec);
+  const errors = sigmaRa && sigmaDec && galacticErrors(sky, sigmaRa, sigmaDec, make);
   return { l: { values: l, sigma: errors?.l }, b: { values: b, sigma: errors?.b } };
 }
 
-function galacticErrors(sky: Sky, sigmaRa: Float64Array, sigmaDec: Float64Array): { l: Float64Array; b: Float64Array } {
-  const [l, b] = [new Float64Array(sky.rows), new Float64Array(sky.rows)];
+function galacticErrors(
+  sky: Sky,
+  sigmaRa: Float64Array,
+  sigmaDec: Float64Array,
+  make: MakeColumn,
+): { l: Float64Array; b: Float64Array } {
+  const [l, b] = [make(sky.rows), make(sky.rows)];
   const basis = new Float64Array(9);
   for (let row = 0; row < sky.rows; row++) {
     skyBasis(GALACTIC_FROM_ICRS, sky, row, basis);

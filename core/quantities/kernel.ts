@@ -1,4 +1,5 @@
 import type { Phase } from '../frame/phase';
+import type { MakeColumn } from '../table/columnpool';
 import type { Momenta } from './momenta';
 import type { Motions } from './motions';
 import type { Places } from './places';
@@ -6,6 +7,7 @@ import type { Places } from './places';
 /** The Galactocentric state of all rows; each family of columns is computed when first asked for. */
 export interface GalactocentricState {
   readonly phase: Phase;
+  readonly make: MakeColumn;
   places(): Places;
   motions(): Motions;
   momenta(): Momenta;

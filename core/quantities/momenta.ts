@@ -1,3 +1,4 @@
+import { freshColumn } from '../table/columnpool';
 import type { Phase } from '../frame/phase';
 import { atan2Deg, turnPositive } from '../frame/trigonometry';
 
@@ -13,8 +14,8 @@ export interface Momenta {
 }
 
 /** See Momenta; one number per row. */
-export function momentaOf({ rows, x, y, z, vX, vY, vZ }: Phase): Momenta {
-  const column = (): Float64Array => new Float64Array(rows);
+export function momentaOf({ rows, x, y, z, vX, vY, vZ }: Phase, make = freshColumn): Momenta {
+  const column = (): Float64Array => make(rows);
   const to = { x: column(), y: column(), prograde: column(), total: column() };
   for (let i = 0; i < rows; i++) {
     const lX = y[i]! * vZ[i]! - z[i]! * vY[i]!;
@@ -29,16 +30,16 @@ export function momentaOf({ rows, x, y, z, vX, vY, vZ }: Phase): Momenta {
 }
 
 /** Longitude of the orbital pole, [0, 360) degrees; NaN where no longitude is defined (pole of the Galaxy, radial orbit). */
-export function poleLongitudes({ x, y }: Momenta): Float64Array {
-  const longitudes = new Float64Array(x.length);
+export function poleLongitudes({ x, y }: Momenta, make = freshColumn): Float64Array {
+  const longitudes = make(x.length);
   atan2Deg(y, x, longitudes);
   turnPositive(longitudes);
   return longitudes;
 }
 
 /** Latitude of the orbital pole, degrees; NaN for a radial orbit. */
-export function poleLatitudes({ x, y, prograde }: Momenta): Float64Array {
-  const latitudes = new Float64Array(x.length);
+export function poleLatitudes({ x, y, prograde }: Momenta, make = freshColumn): Float64Array {
+  const latitudes = make(x.length);
   for (let i = 0; i < latitudes.length; i++) latitudes[i] = Math.sqrt(x[i]! * x[i]! + y[i]! * y[i]!);
   atan2Deg(prograde, latitudes, latitudes);
   for (let i = 0; i < latitudes.length; i++) latitudes[i] = -latitudes[i]!;

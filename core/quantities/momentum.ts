@@ -34,7 +34,7 @@ export const MOMENTUM_KERNELS = {
   },
   pole_l: {
     moving: true,
-    values: (state) => poleLongitudes(state.momenta()),
+    values: (state) => poleLongitudes(state.momenta(), state.make),
     gradient(state) {
       const { x, y } = state.momenta();
       return (i, to) => {
@@ -45,7 +45,7 @@ export const MOMENTUM_KERNELS = {
   },
   pole_b: {
     moving: true,
-    values: (state) => poleLatitudes(state.momenta()),
+    values: (state) => poleLatitudes(state.momenta(), state.make),
     gradient(state) {
       const { x, y, prograde, total } = state.momenta();
       return (i, to) => {

@@ -1,3 +1,4 @@
+import { freshColumn } from '../table/columnpool';
 import type { Phase } from '../frame/phase';
 import type { Momenta } from './momenta';
 import type { Places } from './places';
@@ -18,9 +19,9 @@ export interface Motions {
 }
 
 /** See Motions; all of them in one pass, because they share their parts. */
-export function motionsOf(phase: Phase, { cylR, r }: Places, { total }: Momenta): Motions {
+export function motionsOf(phase: Phase, { cylR, r }: Places, { total }: Momenta, make = freshColumn): Motions {
   const { rows, x, y, z, vX, vY, vZ, lsrSpeedKmS } = phase;
-  const column = (): Float64Array => new Float64Array(rows);
+  const column = (): Float64Array => make(rows);
   const [vCylR, vPhi, vR, vTheta] = [column(), column(), column(), column()];
   const [vT, speed, toomreSpeed] = [column(), column(), column()];
   for (let i = 0; i < rows; i++) {

@@ -1,3 +1,4 @@
+import { freshColumn } from '../table/columnpool';
 import type { Phase } from '../frame/phase';
 
 /** Radii of the Galactocentric position, kpc: cylindrical and spherical. */
@@ -7,8 +8,8 @@ export interface Places {
 }
 
 /** See Places; one number per row. */
-export function placesOf({ rows, x, y, z }: Phase): Places {
-  const [cylR, r] = [new Float64Array(rows), new Float64Array(rows)];
+export function placesOf({ rows, x, y, z }: Phase, make = freshColumn): Places {
+  const [cylR, r] = [make(rows), make(rows)];
   for (let i = 0; i < rows; i++) {
     const level = x[i]! * x[i]! + y[i]! * y[i]!;
     cylR[i] = Math.sqrt(level);

@@ -1,3 +1,4 @@
+import { freshColumn } from '../table/columnpool';
 import { TRIANGLE } from '../frame/covariance';
 import type { Gradient } from './kernel';
 
@@ -6,8 +7,13 @@ import type { Gradient } from './kernel';
  * @param moving whether the quantity hangs on the velocity; one of the position alone must not see velocity errors,
  *   which may be missing
  */
-export function sigmasOf(gradient: Gradient, moving: boolean, covariance: Float64Array): Float64Array {
-  const sigmas = new Float64Array(covariance.length / TRIANGLE);
+export function sigmasOf(
+  gradient: Gradient,
+  moving: boolean,
+  covariance: Float64Array,
+  make = freshColumn,
+): Float64Array {
+  const sigmas = make(covariance.length / TRIANGLE);
   const g = new Float64Array(6);
   const c = covariance;
   for (let row = 0, at = 0; row < sigmas.length; row++, at += TRIANGLE) {

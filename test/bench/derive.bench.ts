@@ -9,6 +9,7 @@ import { solarFrame } from '../../core/frame/solarframes';
 import { dice } from '../../core/mock/dice';
 import { deriveQuantities } from '../../core/quantities/derive';
 import { DERIVED } from '../../core/quantities/registry';
+import { columnPool, type MakeColumn } from '../../core/table/columnpool';
 import { type MeasuredTable, measuredRows } from '../../core/table/measured';
 import { measuredTable } from '../core/quantities/measuredtable';
 import { cpuSeconds, median, python, show, times } from './table';
@@ -31,14 +32,17 @@ const errors = fill(() => 0.1);
 const plain = measuredTable(values);
 const full = measuredTable(Object.fromEntries(Object.entries(values).map(([id, list]) => [id, [list, errors]])));
 
-function everything(table: MeasuredTable): void {
-  const quantities = deriveQuantities(table, OPTIONS);
+function everything(table: MeasuredTable, make?: MakeColumn): void {
+  const quantities = deriveQuantities(table, make ? { ...OPTIONS, make } : OPTIONS);
   for (const { id } of DERIVED) quantities.column(id);
 }
 
 function byBlocks(table: MeasuredTable): void {
-  for (let from = 0; from < ROWS; from += ROWS_AT_ONCE)
-    everything(measuredRows(table, from, Math.min(ROWS, from + ROWS_AT_ONCE)));
+  const pool = columnPool();
+  for (let from = 0; from < ROWS; from += ROWS_AT_ONCE) {
+    pool.reset();
+    everything(measuredRows(table, from, Math.min(ROWS, from + ROWS_AT_ONCE)), pool.make);
+  }
 }
 
 function rounds(work: () => void): { first: number; later: number } {
