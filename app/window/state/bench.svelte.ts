@@ -1,9 +1,12 @@
 import { type EngineLink, LostError, RefusedError } from '../../contract/link';
 import type { BenchView, Change, Progress, RequestName, Requests } from '../../contract/messages';
+import { dataKey } from './datakey';
 
 /** The bench as this window knows it, and the way to change it. */
 export class BenchState {
   view = $state.raw<BenchView | undefined>();
+  /** Names the objects and quantities in view; empty before there are any. */
+  key = $state('');
   progress = $state.raw<Progress | undefined>();
   connected = $state(false);
   /** Sentences of what went wrong, newest last, until the user puts them away. */
@@ -62,10 +65,12 @@ export class BenchState {
 
   #take(view: BenchView): void {
     if (this.view && view.revision < this.view.revision && view.recipePath === this.view.recipePath) return;
-    if (view.version !== this.view?.version) {
+    const key = dataKey(view);
+    if (key !== this.key) {
       this.pointed = -1;
       this.chosen = -1;
     }
+    this.key = key;
     this.view = view;
   }
 }

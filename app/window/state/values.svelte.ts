@@ -3,7 +3,7 @@ import type { BenchState } from './bench.svelte';
 /** Quantity columns that this window has fetched for the objects in view. */
 export class Values {
   readonly #bench: BenchState;
-  #version = -1;
+  #key = '';
   #columns = new Map<string, Float64Array | undefined>();
   /** Grows when a column arrives, so that what draws it draws again. */
   arrived = $state(0);
@@ -13,23 +13,27 @@ export class Values {
     this.#bench = bench;
   }
 
-  /** The column if it is here; asks for it otherwise. */
+  /** The column if it is here; asks for it otherwise, once the engine can be reached. */
   column(id: string): Float64Array | undefined {
-    const version = this.#bench.view?.version ?? -1;
-    if (version !== this.#version) {
-      this.#version = version;
+    const { view, key, connected } = this.#bench;
+    if (key !== this.#key) {
+      this.#key = key;
       this.#columns = new Map();
       this.#asked.clear();
     }
-    if (!this.#columns.has(id) && !this.#asked.has(id)) void this.#fetch(id, version);
+    const wanted = connected && view !== undefined && !this.#columns.has(id) && !this.#asked.has(id);
+    if (wanted) void this.#fetch(id, view.version);
     return this.#columns.get(id);
   }
 
   async #fetch(id: string, version: number): Promise<void> {
+    const key = this.#key;
     this.#asked.add(id);
     const answer = await this.#bench.ask('quantity.values', { ids: [id], version });
-    if (answer?.version !== this.#version) return;
-    this.#columns.set(id, answer.values[id]);
-    this.arrived++;
+    if (key !== this.#key) return;
+    if (answer?.version === version && key === this.#bench.key) {
+      this.#columns.set(id, answer.values[id]);
+      this.arrived++;
+    } else if (!this.#bench.connected) this.#asked.delete(id);
   }
 }
