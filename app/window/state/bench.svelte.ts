@@ -17,14 +17,19 @@ export class BenchState {
   readonly link: EngineLink;
   #waiting: { change: Change; gesture: string } | undefined;
   #flying = false;
+  #shown = 0;
 
   constructor(link: EngineLink) {
     this.link = link;
-    link.listen('bench', (view) => this.#take(view));
+    link.listen('bench', (view) => {
+      this.#shown++;
+      this.#take(view);
+    });
     link.listen('progress', (progress) => (this.progress = progress));
     link.onState((connected) => {
       this.connected = connected;
-      if (connected) void this.ask('bench.view', {}).then((view) => view && this.#take(view));
+      if (connected) void this.#greet();
+      else this.progress = undefined;
     });
   }
 
@@ -63,8 +68,15 @@ export class BenchState {
     this.#flying = false;
   }
 
+  /** Asks for the view that is true now; one that the engine sent meanwhile is newer. */
+  async #greet(): Promise<void> {
+    const before = this.#shown;
+    const view = await this.ask('bench.view', {});
+    if (view && before === this.#shown) this.#take(view);
+  }
+
+  /** Every view that comes is the truth: they come in order, and an engine that was restarted counts from the start. */
   #take(view: BenchView): void {
-    if (this.view && view.revision < this.view.revision && view.recipePath === this.view.recipePath) return;
     const key = dataKey(view);
     if (key !== this.key) {
       this.pointed = -1;

@@ -43,9 +43,14 @@ export class DoubleEngine {
     },
   };
 
+  /** Connects and answers nothing. */
+  reach(): void {
+    this.#tell(true);
+  }
+
   /** Connects, and answers the window's first question with a view. */
   async connect(view: BenchView): Promise<void> {
-    this.#tell(true);
+    this.reach();
     await this.next('bench.view').answer(view);
   }
 
