@@ -1,6 +1,8 @@
 import { type EngineLink, LostError, RefusedError } from '../../contract/link';
 import type { BenchView, Change, Progress, RequestName, Requests } from '../../contract/messages';
 import { dataKey } from './datakey';
+import { commitFields } from './edits';
+import { type Edit, type Fate, Outbox } from './outbox.svelte';
 
 /** The bench as this window knows it, and the way to change it. */
 export class BenchState {
@@ -15,8 +17,10 @@ export class BenchState {
   pointed = $state(-1);
   chosen = $state(-1);
   readonly link: EngineLink;
-  #waiting: { change: Change; gesture: string } | undefined;
-  #flying = false;
+  readonly outbox = new Outbox(
+    (change, gesture) => this.#send(change, gesture),
+    () => this.view,
+  );
   #shown = 0;
 
   constructor(link: EngineLink) {
@@ -29,11 +33,14 @@ export class BenchState {
     link.onState((connected) => {
       this.connected = connected;
       if (connected) void this.#greet();
-      else this.progress = undefined;
+      else {
+        this.progress = undefined;
+        this.outbox.pause();
+      }
     });
   }
 
-  /** Asks the engine; a refusal is shown and gives undefined. */
+  /** Asks the engine for something to show; a refusal is shown and gives undefined. */
   async ask<Name extends RequestName>(
     name: Name,
     params: Requests[Name]['params'],
@@ -47,25 +54,54 @@ export class BenchState {
     }
   }
 
-  /** Changes the recipe; true when the engine took it. */
-  async change(change: Change): Promise<boolean> {
-    return (await this.ask('bench.change', { change })) !== undefined;
+  /**
+   * Asks the engine to do something that must not overtake an edit: what stands unsent in fields goes first. Gives
+   * undefined, and says why, when an edit was not taken or the engine cannot be reached.
+   */
+  async act<Name extends RequestName>(
+    name: Name,
+    params: Requests[Name]['params'],
+  ): Promise<Requests[Name]['result'] | undefined> {
+    const before = this.refusals.length;
+    const readable = commitFields();
+    if (!readable && (name === 'bench.save' || name === 'edition.freeze')) {
+      this.refusals.push('Not done: a field holds what cannot be read. Mend it, or press Escape in it.');
+      return undefined;
+    }
+    if (!(await this.outbox.settled())) {
+      this.refusals.push('Not done: the engine cannot be reached. What you typed is kept.');
+      return undefined;
+    }
+    if (this.refusals.length > before) return undefined;
+    const result = await this.ask(name, params);
+    if (!this.connected) this.refusals.push('The engine was lost before it answered: look whether it was done.');
+    return result;
+  }
+
+  /** Changes the recipe; true when the engine took it. What sets a value waits for a lost engine, the rest does not. */
+  async change(edit: Edit): Promise<boolean> {
+    const before = this.refusals.length;
+    const taken = await this.outbox.put(edit);
+    if (!taken && !this.connected && this.refusals.length === before)
+      this.refusals.push('Not done: the engine cannot be reached.');
+    return taken;
   }
 
   /** Changes within one gesture (a drag, a typing): at most one is under way, and the newest wins. */
-  gesture(change: Change, gesture: string): void {
-    this.#waiting = { change, gesture };
-    if (!this.#flying) void this.#fly();
+  gesture(change: Change, gesture: string): Promise<boolean> {
+    return this.outbox.put(change, gesture);
   }
 
-  async #fly(): Promise<void> {
-    this.#flying = true;
-    while (this.#waiting) {
-      const next = this.#waiting;
-      this.#waiting = undefined;
-      await this.ask('bench.change', next);
+  async #send(change: Change, gesture: string | undefined): Promise<Fate> {
+    try {
+      await this.link.ask('bench.change', gesture === undefined ? { change } : { change, gesture });
+      return 'taken';
+    } catch (error) {
+      if (error instanceof LostError) return 'lost';
+      if (!(error instanceof RefusedError)) throw error;
+      this.refusals.push(...error.problems.map(({ text }) => text));
+      return 'refused';
     }
-    this.#flying = false;
   }
 
   /** Asks for the view that is true now; one that the engine sent meanwhile is newer. */
@@ -73,10 +109,13 @@ export class BenchState {
     const before = this.#shown;
     const view = await this.ask('bench.view', {});
     if (view && before === this.#shown) this.#take(view);
+    if (this.connected && this.view) this.outbox.resume();
   }
 
   /** Every view that comes is the truth: they come in order, and an engine that was restarted counts from the start. */
   #take(view: BenchView): void {
+    if (this.view && this.view.recipePath !== view.recipePath && this.outbox.forget() > 0)
+      this.refusals.push('Another bench was opened; changes that were still waiting for this one are gone.');
     const key = dataKey(view);
     if (key !== this.key) {
       this.pointed = -1;
