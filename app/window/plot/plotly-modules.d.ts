@@ -3,7 +3,3 @@ declare module 'plotly.js/lib/core' {
   const core: unknown;
   export default core;
 }
-declare module 'plotly.js/lib/heatmap' {
-  const trace: object;
-  export default trace;
-}

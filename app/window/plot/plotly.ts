@@ -1,12 +1,10 @@
 import core from 'plotly.js/lib/core';
-import heatmap from 'plotly.js/lib/heatmap';
 import type { Drawn, PlotElement, PlotlyCore } from './types';
 
 const Plotly = core as PlotlyCore;
 
-// plotly lays out axes, zoom and the drawing of shapes; the marks are drawn by us, because redrawing its own marks
-// takes tens of milliseconds a plate. The heat map is there for plates of very many objects.
-Plotly.register([heatmap]);
+// plotly lays out axes, zoom and the drawing of shapes; marks and cells are drawn by us, because redrawing its own
+// marks takes tens of milliseconds a plate, and its heat map asks for inline styles.
 
 const CONFIG = {
   displaylogo: false,
@@ -29,8 +27,6 @@ export interface PlateLook {
   readonly ink: string;
   readonly rule: string;
   readonly font: string;
-  /** Counts to draw as a heat map, or none. */
-  readonly density: object | undefined;
 }
 
 /** Lays out a plate, or lays it out anew. */
@@ -71,7 +67,7 @@ export function layPlate(element: HTMLElement, look: PlateLook): Promise<PlotEle
     uirevision: `${look.xTitle} ${look.yTitle}`,
     newselection: { line: { color: look.ink, width: 1.2, dash: 'dot' } },
   };
-  return Plotly.react(element, look.density ? [look.density] : [corners], layout, CONFIG);
+  return Plotly.react(element, [corners], layout, CONFIG);
 }
 
 /** Calls back when a lasso or box was drawn on the plate, with its corners in data coordinates. */
@@ -85,6 +81,17 @@ export function onShape(element: PlotElement, heard: (polygon: [number, number][
 /** Calls back when axes moved. */
 export function onMoved(element: PlotElement, heard: () => void): void {
   for (const event of ['plotly_relayout', 'plotly_relayouting', 'plotly_afterplot']) element.on(event, heard);
+}
+
+/** Calls back with what the axes show, once they came to rest. */
+export function onZoomed(
+  element: PlotElement,
+  heard: (range: { x: readonly [number, number]; y: readonly [number, number] }) => void,
+): void {
+  element.on('plotly_relayout', () => {
+    const { xaxis, yaxis } = element._fullLayout;
+    heard({ x: [...xaxis.range], y: [...yaxis.range] });
+  });
 }
 
 /** Takes a drawn shape off the plate. */

@@ -3,6 +3,7 @@ import type { BenchView, Change, Progress, RequestName, Requests } from '../../c
 import { dataKey } from './datakey';
 import { commitFields } from './edits';
 import { type Edit, type Fate, Outbox } from './outbox.svelte';
+import { shared } from './shared';
 
 /** The bench as this window knows it, and the way to change it. */
 export class BenchState {
@@ -122,7 +123,7 @@ export class BenchState {
       this.chosen = -1;
     }
     this.key = key;
-    this.view = view;
+    this.view = shared(this.view, view);
   }
 }
 
