@@ -208,7 +208,7 @@ describe.skipIf(!hasChromium)('the bench in a real browser', () => {
       )
       .toBe(true);
     await door.stop('SIGKILL');
-    await page.getByText('engine lost').waitFor();
+    await page.getByText('not connected').waitFor();
     door = await openDoor(place, place.recipe);
     await page.context().close();
     page = await openPage(door.address);

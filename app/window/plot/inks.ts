@@ -1,3 +1,4 @@
+import type { Tones } from './raster';
 import type { Inks } from './marks';
 
 /** A colour of the style sheet as it stands now. */
@@ -12,5 +13,13 @@ export function inksOf(): Inks {
     borderline: plainColour('--borderline'),
     dropped: plainColour('--dropped'),
     unjudged: plainColour('--unjudged'),
+  };
+}
+
+/** The tones of a density: few to many. */
+export function tonesOf(): Tones {
+  return {
+    dropped: [plainColour('--dropped-few'), plainColour('--dropped-many')],
+    sample: [plainColour('--sample-few'), plainColour('--sample-many')],
   };
 }

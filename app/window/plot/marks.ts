@@ -1,4 +1,3 @@
-import { prepared } from './canvas';
 import type { AxisLayout } from './types';
 
 /** Colours of a plate, read from the style sheet. */
@@ -32,10 +31,12 @@ export function drawMarks(
   const context = prepared(canvas);
   if (!context) return;
   const { x: ax, y: ay } = axes;
+  const [toX, toY] = [pixels(ax), pixels(ay)];
   context.beginPath();
   context.rect(ax._offset, ay._offset, ax._length, ay._length);
   context.clip();
   const size = markSize(marks.x.length);
+  const [wide, high] = [ax._offset + ax._length + 9, ay._offset + ay._length + 9];
   const colours = [inks.kept, inks.borderline, inks.dropped, inks.unjudged];
   for (const verdict of ORDER) {
     context.strokeStyle = context.fillStyle = colours[verdict]!;
@@ -43,8 +44,8 @@ export function drawMarks(
     const path = new Path2D();
     for (let row = 0; row < marks.x.length; row++) {
       if (marks.verdicts[row] !== verdict) continue;
-      const [px, py] = [ax._offset + ax.d2p(marks.x[row]!), ay._offset + ay.d2p(marks.y[row]!)];
-      if (px - px === 0 && py - py === 0) SHAPES[verdict](path, px, py, size);
+      const [px, py] = [toX.at + toX.per * marks.x[row]!, toY.at + toY.per * marks.y[row]!];
+      if (px > -9 && py > -9 && px < wide && py < high) SHAPES[verdict](path, px, py, size);
     }
     if (verdict === 0) context.fill(path);
     else context.stroke(path);
@@ -54,7 +55,8 @@ export function drawMarks(
   const halves = new Path2D();
   for (let row = 0; row < marks.x.length; row++) {
     if (marks.verdicts[row] !== 1) continue;
-    const [px, py] = [ax._offset + ax.d2p(marks.x[row]!), ay._offset + ay.d2p(marks.y[row]!)];
+    const [px, py] = [toX.at + toX.per * marks.x[row]!, toY.at + toY.per * marks.y[row]!];
+    if (!(px > -9 && py > -9 && px < wide && py < high)) continue;
     halves.moveTo(px, py);
     halves.arc(px, py, size + 0.6, 0, Math.PI);
   }
@@ -93,12 +95,32 @@ export function nearest(
   reach = 9,
 ): number {
   let [best, least] = [-1, reach * reach];
+  const [toX, toY] = [pixels(axes.x), pixels(axes.y)];
   for (let row = 0; row < marks.x.length; row++) {
-    const [dx, dy] = [axes.x._offset + axes.x.d2p(marks.x[row]!) - px, axes.y._offset + axes.y.d2p(marks.y[row]!) - py];
+    const dx = toX.at + toX.per * marks.x[row]! - px;
+    const dy = toY.at + toY.per * marks.y[row]! - py;
     const square = dx * dx + dy * dy;
     if (square < least) [best, least] = [row, square];
   }
   return best;
+}
+
+/** How data become pixels of the canvas: the axes of plates are linear. */
+function pixels(axis: AxisLayout): { at: number; per: number } {
+  const at = axis.d2p(0);
+  return { at: axis._offset + at, per: axis.d2p(1) - at };
+}
+
+/** The canvas at the screen's resolution, cleared; restore its context after drawing. */
+export function prepared(canvas: HTMLCanvasElement): CanvasRenderingContext2D | null {
+  const context = canvas.getContext('2d');
+  const scale = window.devicePixelRatio;
+  const [width, height] = [canvas.clientWidth * scale, canvas.clientHeight * scale];
+  if (canvas.width !== width || canvas.height !== height) [canvas.width, canvas.height] = [width, height];
+  context?.setTransform(scale, 0, 0, scale, 0, 0);
+  context?.clearRect(0, 0, canvas.clientWidth, canvas.clientHeight);
+  context?.save();
+  return context;
 }
 
 function markSize(count: number): number {

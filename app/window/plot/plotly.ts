@@ -3,8 +3,8 @@ import type { Drawn, PlotElement, PlotlyCore } from './types';
 
 const Plotly = core as PlotlyCore;
 
-// plotly lays out axes, zoom and the drawing of shapes; marks and shades are drawn by us, because redrawing its own
-// takes tens of milliseconds a plate.
+// plotly lays out axes, zoom and the drawing of shapes; marks and cells are drawn by us, because redrawing its own
+// marks takes tens of milliseconds a plate, and its heat map asks for inline styles.
 
 const CONFIG = {
   displaylogo: false,
@@ -81,6 +81,17 @@ export function onShape(element: PlotElement, heard: (polygon: [number, number][
 /** Calls back when axes moved. */
 export function onMoved(element: PlotElement, heard: () => void): void {
   for (const event of ['plotly_relayout', 'plotly_relayouting', 'plotly_afterplot']) element.on(event, heard);
+}
+
+/** Calls back with what the axes show, once they came to rest. */
+export function onZoomed(
+  element: PlotElement,
+  heard: (range: { x: readonly [number, number]; y: readonly [number, number] }) => void,
+): void {
+  element.on('plotly_relayout', () => {
+    const { xaxis, yaxis } = element._fullLayout;
+    heard({ x: [...xaxis.range], y: [...yaxis.range] });
+  });
 }
 
 /** Takes a drawn shape off the plate. */

@@ -19,9 +19,8 @@ export interface Drawn {
   readonly range?: { readonly x: readonly [number, number]; readonly y: readonly [number, number] };
 }
 
-/** plotly.js' core with traces that the window registers itself. */
+/** What the window uses of plotly.js' core. */
 export interface PlotlyCore {
-  register(traces: readonly object[]): void;
   react(element: HTMLElement, data: readonly object[], layout: object, config: object): Promise<PlotElement>;
   relayout(element: HTMLElement, update: object): Promise<PlotElement>;
   purge(element: HTMLElement): void;

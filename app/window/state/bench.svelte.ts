@@ -1,17 +1,15 @@
 import { type EngineLink, LostError, RefusedError } from '../../contract/link';
 import type { BenchView, Change, Progress, RequestName, Requests } from '../../contract/messages';
-
-interface Gesture {
-  readonly change: Change;
-  readonly gesture: string;
-}
-
-const LOST =
-  'The engine was lost before it answered. It comes back with what it had; look whether your last step is there.';
+import { dataKey } from './datakey';
+import { commitFields } from './edits';
+import { type Edit, type Fate, Outbox } from './outbox.svelte';
+import { shared } from './shared';
 
 /** The bench as this window knows it, and the way to change it. */
 export class BenchState {
   view = $state.raw<BenchView | undefined>();
+  /** Names the objects and quantities in view; empty before there are any. */
+  key = $state('');
   progress = $state.raw<Progress | undefined>();
   connected = $state(false);
   /** Sentences of what went wrong, newest last, until the user puts them away. */
@@ -19,118 +17,113 @@ export class BenchState {
   /** Marked object, shown on every plate; −1 for none. */
   pointed = $state(-1);
   chosen = $state(-1);
-  /** Counts the engines that this window has been joined to; numbers of one mean nothing to the next. */
-  epoch = $state(0);
   readonly link: EngineLink;
-  /** The first view after a connection is the truth, whatever its number. */
-  #fresh = true;
-  #waiting: Gesture | undefined;
-  #flight: Promise<void> | undefined;
+  readonly outbox = new Outbox(
+    (change, gesture) => this.#send(change, gesture),
+    () => this.view,
+  );
+  #shown = 0;
 
   constructor(link: EngineLink) {
     this.link = link;
-    link.listen('bench', (view) => this.#take(view));
+    link.listen('bench', (view) => {
+      this.#shown++;
+      this.#take(view);
+    });
     link.listen('progress', (progress) => (this.progress = progress));
-    link.onState((connected) => void this.#joined(connected));
+    link.onState((connected) => {
+      this.connected = connected;
+      if (connected) void this.#greet();
+      else {
+        this.progress = undefined;
+        this.outbox.pause();
+      }
+    });
   }
 
-  /** Asks the engine; a refusal is shown and gives undefined, and so does an engine that is lost. */
-  ask<Name extends RequestName>(
+  /** Asks the engine for something to show; a refusal is shown and gives undefined. */
+  async ask<Name extends RequestName>(
     name: Name,
     params: Requests[Name]['params'],
-  ): Promise<Requests[Name]['result'] | undefined> {
-    return this.#answer(name, params, undefined);
-  }
-
-  /** Does a step that changes something, after everything that was typed or dragged before; says so when it is lost. */
-  async step<Name extends RequestName>(
-    name: Name,
-    params: Requests[Name]['params'],
-  ): Promise<Requests[Name]['result'] | undefined> {
-    await this.settled();
-    return this.#answer(name, params, LOST);
-  }
-
-  /** Changes the recipe; true when the engine took it. */
-  async change(change: Change): Promise<boolean> {
-    return (await this.step('bench.change', { change })) !== undefined;
-  }
-
-  /** Changes within one gesture (a drag, a typing): at most one is under way, and the newest wins. */
-  gesture(change: Change, gesture: string): void {
-    this.#waiting = { change, gesture };
-    this.#flight ??= this.#fly().finally(() => (this.#flight = undefined));
-  }
-
-  /** Waits until the engine has heard everything that was typed or dragged. */
-  settled(): Promise<void> {
-    return this.#flight ?? Promise.resolve();
-  }
-
-  async #answer<Name extends RequestName>(
-    name: Name,
-    params: Requests[Name]['params'],
-    lost: string | undefined,
   ): Promise<Requests[Name]['result'] | undefined> {
     try {
       return await this.link.ask(name, params);
     } catch (error) {
-      if (!(error instanceof LostError)) this.#refused(error);
-      else if (lost !== undefined) this.refusals.push(lost);
+      if (error instanceof RefusedError) this.refusals.push(...error.problems.map(({ text }) => text));
+      else if (!(error instanceof LostError)) throw error;
       return undefined;
     }
   }
 
-  #refused(error: unknown): void {
-    if (!(error instanceof RefusedError)) throw error;
-    this.refusals.push(...error.problems.map(({ text }) => text));
+  /**
+   * Asks the engine to do something that must not overtake an edit: what stands unsent in fields goes first. Gives
+   * undefined, and says why, when an edit was not taken or the engine cannot be reached.
+   */
+  async act<Name extends RequestName>(
+    name: Name,
+    params: Requests[Name]['params'],
+  ): Promise<Requests[Name]['result'] | undefined> {
+    const before = this.refusals.length;
+    const readable = commitFields();
+    if (!readable && (name === 'bench.save' || name === 'edition.freeze')) {
+      this.refusals.push('Not done: a field holds what cannot be read. Mend it, or press Escape in it.');
+      return undefined;
+    }
+    if (!(await this.outbox.settled())) {
+      this.refusals.push('Not done: the engine cannot be reached. What you typed is kept.');
+      return undefined;
+    }
+    if (this.refusals.length > before) return undefined;
+    const result = await this.ask(name, params);
+    if (!this.connected) this.refusals.push('The engine was lost before it answered: look whether it was done.');
+    return result;
   }
 
-  async #fly(): Promise<void> {
-    while (this.#waiting) {
-      const next = this.#waiting;
-      this.#waiting = undefined;
-      try {
-        await this.link.ask('bench.change', next);
-      } catch (error) {
-        if (error instanceof LostError) await this.#comeBack(next);
-        else this.#refused(error);
-      }
+  /** Changes the recipe; true when the engine took it. What sets a value waits for a lost engine, the rest does not. */
+  async change(edit: Edit): Promise<boolean> {
+    const before = this.refusals.length;
+    const taken = await this.outbox.put(edit);
+    if (!taken && !this.connected && this.refusals.length === before)
+      this.refusals.push('Not done: the engine cannot be reached.');
+    return taken;
+  }
+
+  /** Changes within one gesture (a drag, a typing): at most one is under way, and the newest wins. */
+  gesture(change: Change, gesture: string): Promise<boolean> {
+    return this.outbox.put(change, gesture);
+  }
+
+  async #send(change: Change, gesture: string | undefined): Promise<Fate> {
+    try {
+      await this.link.ask('bench.change', gesture === undefined ? { change } : { change, gesture });
+      return 'taken';
+    } catch (error) {
+      if (error instanceof LostError) return 'lost';
+      if (!(error instanceof RefusedError)) throw error;
+      this.refusals.push(...error.problems.map(({ text }) => text));
+      return 'refused';
     }
   }
 
-  /** Keeps what a lost engine did not take, unless something newer is there, and waits for the next engine. */
-  async #comeBack(lost: Gesture): Promise<void> {
-    this.#waiting ??= lost;
-    if (this.connected) return;
-    await new Promise<void>((resolve) => {
-      const stop = this.link.onState((connected) => {
-        if (!connected) return;
-        stop();
-        resolve();
-      });
-    });
-  }
-
-  async #joined(connected: boolean): Promise<void> {
-    this.connected = connected;
-    if (!connected) return;
-    this.#fresh = true;
-    this.progress = undefined;
+  /** Asks for the view that is true now; one that the engine sent meanwhile is newer. */
+  async #greet(): Promise<void> {
+    const before = this.#shown;
     const view = await this.ask('bench.view', {});
-    if (view) this.#take(view);
+    if (view && before === this.#shown) this.#take(view);
+    if (this.connected && this.view) this.outbox.resume();
   }
 
+  /** Every view that comes is the truth: they come in order, and an engine that was restarted counts from the start. */
   #take(view: BenchView): void {
-    const before = this.view;
-    if (!this.#fresh && before && view.revision < before.revision) return;
-    if (this.#fresh) this.epoch++;
-    if (this.#fresh || view.version !== before?.version) {
+    if (this.view && this.view.recipePath !== view.recipePath && this.outbox.forget() > 0)
+      this.refusals.push('Another bench was opened; changes that were still waiting for this one are gone.');
+    const key = dataKey(view);
+    if (key !== this.key) {
       this.pointed = -1;
       this.chosen = -1;
     }
-    this.#fresh = false;
-    this.view = view;
+    this.key = key;
+    this.view = shared(this.view, view);
   }
 }
 

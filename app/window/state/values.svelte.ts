@@ -3,7 +3,7 @@ import type { BenchState } from './bench.svelte';
 /** Quantity columns that this window has fetched for the objects in view. */
 export class Values {
   readonly #bench: BenchState;
-  #objects = '';
+  #key = '';
   #columns = new Map<string, Float64Array | undefined>();
   /** Grows when a column arrives, so that what draws it draws again. */
   arrived = $state(0);
@@ -13,29 +13,27 @@ export class Values {
     this.#bench = bench;
   }
 
-  /** The column if it is here; asks for it otherwise. */
+  /** The column if it is here; asks for it otherwise, once the engine can be reached. */
   column(id: string): Float64Array | undefined {
-    void this.arrived;
-    const version = this.#bench.view?.version ?? -1;
-    const objects = `${this.#bench.epoch} ${version}`;
-    if (objects !== this.#objects) {
-      this.#objects = objects;
+    const { view, key, connected } = this.#bench;
+    if (key !== this.#key) {
+      this.#key = key;
       this.#columns = new Map();
       this.#asked.clear();
     }
-    if (!this.#columns.has(id) && !this.#asked.has(id)) void this.#fetch(id, version, objects);
+    const wanted = connected && view !== undefined && !this.#columns.has(id) && !this.#asked.has(id);
+    if (wanted) void this.#fetch(id, view.version);
     return this.#columns.get(id);
   }
 
-  async #fetch(id: string, version: number, objects: string): Promise<void> {
+  async #fetch(id: string, version: number): Promise<void> {
+    const key = this.#key;
     this.#asked.add(id);
     const answer = await this.#bench.ask('quantity.values', { ids: [id], version });
-    if (objects !== this.#objects) return;
-    // Asked again when it is wanted next: the engine was lost, or has gone on to other objects.
-    if (answer?.version !== version) this.#asked.delete(id);
-    else {
+    if (key !== this.#key) return;
+    if (answer?.version === version && key === this.#bench.key) {
       this.#columns.set(id, answer.values[id]);
       this.arrived++;
-    }
+    } else if (!this.#bench.connected) this.#asked.delete(id);
   }
 }
